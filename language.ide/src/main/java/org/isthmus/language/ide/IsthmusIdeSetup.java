@@ -11,9 +11,8 @@ import org.isthmus.language.IsthmusStandaloneSetup;
  */
 public class IsthmusIdeSetup extends IsthmusStandaloneSetup {
 
-	@Override
-	public Injector createInjector() {
-		return Guice.createInjector(Modules2.mixin(new IsthmusRuntimeModule(), new IsthmusIdeModule()));
-	}
-	
+    @Override
+    public Injector createInjector() {
+        return Guice.createInjector(Modules2.mixin(new IsthmusRuntimeModule(), new IsthmusIdeModule()));
+    }
 }
