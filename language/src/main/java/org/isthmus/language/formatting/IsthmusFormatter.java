@@ -13,12 +13,8 @@ import org.eclipse.xtext.formatting2.regionaccess.IHiddenRegion;
 import org.eclipse.xtext.formatting2.regionaccess.ISemanticRegion;
 import org.eclipse.xtext.xbase.lib.Procedures.Procedure1;
 import org.isthmus.language.isthmus.Constant;
-import org.isthmus.language.isthmus.DephasingDeclaration;
 import org.isthmus.language.isthmus.Import;
-import org.isthmus.language.isthmus.LatticeDeclaration;
-import org.isthmus.language.isthmus.LatticeUse;
 import org.isthmus.language.isthmus.QuantityLiteral;
-import org.isthmus.language.isthmus.Reference;
 import org.isthmus.language.isthmus.SourceFile;
 import org.isthmus.language.isthmus.UnaryExpression;
 
@@ -31,6 +27,7 @@ import org.isthmus.language.isthmus.UnaryExpression;
  */
 public class IsthmusFormatter extends AbstractJavaFormatter {
     private static final Set<String> TIGHT_OPERATORS = Set.of("*", "/", "^");
+    private static final Set<String> GROUPING = Set.of("Primary", "AxisPoint");
     private static final Set<String> NOTHING_BEFORE = Set.of(",", ";", ")", "]");
     private static final Set<String> NOTHING_AFTER = Set.of("(", "[");
 
@@ -100,34 +97,32 @@ public class IsthmusFormatter extends AbstractJavaFormatter {
         if (isKeyword(right) && NOTHING_BEFORE.contains(after) || isKeyword(left) && NOTHING_AFTER.contains(before)) {
             return NOTHING;
         }
-        if (isKeyword(right, "(") && opensArguments(right.getSemanticElement())) {
+        if (isKeyword(right, "(") && opensArguments(right)) {
             return NOTHING;
         }
-        if (left.getSemanticElement() instanceof QuantityLiteral quantity && left.getSemanticElement() == right.getSemanticElement()) {
+        if (left.getSemanticElement() instanceof QuantityLiteral quantity
+                && left.getSemanticElement() == right.getSemanticElement()) {
             boolean tight = before.equals("^") || after.equals("^") || "i".equals(quantity.getUnit());
             return tight ? NOTHING : SPACE;
         }
         if (left.getSemanticElement() instanceof UnaryExpression && !before.equals("not")) {
             return NOTHING;
         }
-        if (isKeyword(left) && TIGHT_OPERATORS.contains(before) || isKeyword(right) && TIGHT_OPERATORS.contains(after)) {
+        if (isKeyword(left) && TIGHT_OPERATORS.contains(before)
+                || isKeyword(right) && TIGHT_OPERATORS.contains(after)) {
             return NOTHING;
         }
         return SPACE;
     }
 
-    private static boolean opensArguments(EObject element) {
-        return element instanceof Reference
-                || element instanceof LatticeUse
-                || element instanceof LatticeDeclaration
-                || element instanceof DephasingDeclaration;
+    /** By rule, since the parenthesis of a grouping belongs to whatever object comes first inside it. */
+    private static boolean opensArguments(ISemanticRegion parenthesis) {
+        return !GROUPING.contains(
+                GrammarUtil.containingRule(parenthesis.getGrammarElement()).getName());
     }
 
     private static boolean isKeyword(ISemanticRegion region) {
-        return region.getGrammarElement() instanceof Keyword
-                || region.getGrammarElement() instanceof org.eclipse.xtext.RuleCall call
-                        && GrammarUtil.isDatatypeRuleCall(call)
-                        && TIGHT_OPERATORS.contains(region.getText());
+        return region.getGrammarElement() instanceof Keyword;
     }
 
     private static boolean isKeyword(ISemanticRegion region, String text) {
