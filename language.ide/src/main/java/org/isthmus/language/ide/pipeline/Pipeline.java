@@ -10,7 +10,7 @@ import org.eclipse.xtext.util.CancelIndicator;
 import org.eclipse.xtext.validation.CheckMode;
 import org.eclipse.xtext.validation.IResourceValidator;
 import org.eclipse.xtext.validation.Issue;
-import org.isthmus.language.ide.IsthmusIdeSetup;
+import org.isthmus.language.IsthmusStandaloneSetup;
 import org.isthmus.runtime.device.Finding;
 import org.isthmus.runtime.device.SourceRef;
 
@@ -19,7 +19,7 @@ public final class Pipeline {
     private final Injector injector;
 
     public Pipeline() {
-        injector = new IsthmusIdeSetup().createInjectorAndDoEMFRegistration();
+        injector = new IsthmusStandaloneSetup().createInjectorAndDoEMFRegistration();
     }
 
     /**
