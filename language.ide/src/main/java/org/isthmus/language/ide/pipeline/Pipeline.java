@@ -5,12 +5,17 @@ import java.nio.file.Path;
 import java.util.ArrayList;
 import java.util.Comparator;
 import java.util.List;
+import java.util.Optional;
+import org.eclipse.emf.ecore.resource.Resource;
 import org.eclipse.xtext.diagnostics.Severity;
+import org.eclipse.xtext.resource.XtextResource;
+import org.eclipse.xtext.resource.XtextSyntaxDiagnostic;
 import org.eclipse.xtext.util.CancelIndicator;
 import org.eclipse.xtext.validation.CheckMode;
 import org.eclipse.xtext.validation.IResourceValidator;
 import org.eclipse.xtext.validation.Issue;
 import org.isthmus.language.IsthmusStandaloneSetup;
+import org.isthmus.language.formatting.FileLayout;
 import org.isthmus.runtime.device.Finding;
 import org.isthmus.runtime.device.SourceRef;
 
@@ -45,6 +50,31 @@ public final class Pipeline {
             findings.addAll(inFile);
         }
         return findings;
+    }
+
+    /** What keeps a file from being parsed, in the order of lines. */
+    public List<Finding> syntaxErrors(Project project, SourceFile file) {
+        List<Finding> findings = new ArrayList<>();
+        for (Resource.Diagnostic error : project.resource(file).getErrors()) {
+            if (error instanceof XtextSyntaxDiagnostic syntax) {
+                SourceRef place = new SourceRef(
+                        file.shown(), syntax.getLine(), syntax.getColumn(), syntax.getOffset(), syntax.getLength());
+                findings.add(
+                        new Finding("syntax", org.isthmus.runtime.device.Severity.ERROR, syntax.getMessage(), place));
+            }
+        }
+        return findings;
+    }
+
+    /**
+     * A file's text in the canonical layout, where it is laid out otherwise.
+     *
+     * @throws IllegalArgumentException for a file with syntax errors
+     */
+    public Optional<String> relaidOut(Project project, SourceFile file) {
+        XtextResource resource = project.resource(file);
+        String text = injector.getInstance(FileLayout.class).format(resource);
+        return text.equals(resource.getParseResult().getRootNode().getText()) ? Optional.empty() : Optional.of(text);
     }
 
     private static Finding finding(SourceFile file, Issue issue) {
