@@ -6,11 +6,24 @@ import org.eclipse.xtext.formatting2.FormatterPreferenceValuesProvider;
 import org.eclipse.xtext.formatting2.FormatterPreferences;
 import org.eclipse.xtext.formatting2.IFormatter2;
 import org.eclipse.xtext.preferences.IPreferenceValuesProvider;
+import org.eclipse.xtext.resource.IDefaultResourceDescriptionStrategy;
+import org.eclipse.xtext.scoping.IGlobalScopeProvider;
 import org.isthmus.language.formatting.FourSpaces;
 import org.isthmus.language.formatting.IsthmusFormatter;
+import org.isthmus.language.scoping.DeclarationIndexStrategy;
+import org.isthmus.language.scoping.IsthmusGlobalScopeProvider;
 
 /** What the language adds to the generated services, wherever it runs. */
 public class IsthmusRuntimeModule extends AbstractIsthmusRuntimeModule {
+
+    @Override
+    public Class<? extends IGlobalScopeProvider> bindIGlobalScopeProvider() {
+        return IsthmusGlobalScopeProvider.class;
+    }
+
+    public Class<? extends IDefaultResourceDescriptionStrategy> bindIDefaultResourceDescriptionStrategy() {
+        return DeclarationIndexStrategy.class;
+    }
 
     public Class<? extends IFormatter2> bindIFormatter2() {
         return IsthmusFormatter.class;
