@@ -16,14 +16,35 @@ final class FindingWriter {
     private static final Gson GSON =
             new GsonBuilder().setPrettyPrinting().disableHtmlEscaping().create();
 
+    private static final int LONGEST_LINE = 2000;
+
     private FindingWriter() {}
 
     static void write(List<Finding> findings, FindingFormat format, PrintWriter out) {
         switch (format) {
-            case text -> findings.forEach(out::println);
+            case text -> findings.forEach(f -> out.println(line(f)));
             case json -> out.println(GSON.toJson(json(findings)));
             case sarif -> out.println(GSON.toJson(sarif(findings)));
         }
+    }
+
+    /** {@code file:line:column: error CODE: text}, safe for a terminal whatever the file holds. */
+    static String line(Finding finding) {
+        String text = finding.toString();
+        StringBuilder safe = new StringBuilder();
+        for (int i = 0; i < text.length() && safe.length() < LONGEST_LINE; i++) {
+            char c = text.charAt(i);
+            if (c == '\n' || c == '\r' || c == '\t') {
+                safe.append(' ');
+            } else if (Character.isISOControl(c)) {
+                safe.append(String.format("\\u%04x", (int) c));
+            } else {
+                safe.append(c);
+            }
+        }
+        return safe.length() < LONGEST_LINE
+                ? safe.toString()
+                : safe.append(" …").toString();
     }
 
     static long count(List<Finding> findings, Severity severity) {

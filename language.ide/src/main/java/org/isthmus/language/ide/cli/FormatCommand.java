@@ -45,11 +45,13 @@ final class FormatCommand implements Callable<Integer> {
         } catch (MissingInput e) {
             throw new UsageException(e.getMessage());
         }
-        int status = ExitStatus.FINE;
-        for (SourceFile file : project.asked()) {
+        List<Finding> unread = project.unread();
+        unread.forEach(f -> spec.commandLine().getErr().println(FindingWriter.line(f)));
+        int status = unread.isEmpty() ? ExitStatus.FINE : ExitStatus.FINDINGS;
+        for (SourceFile file : project.parsed()) {
             List<Finding> errors = pipeline.syntaxErrors(project, file);
             if (!errors.isEmpty()) {
-                errors.forEach(spec.commandLine().getErr()::println);
+                errors.forEach(f -> spec.commandLine().getErr().println(FindingWriter.line(f)));
                 status = ExitStatus.FINDINGS;
                 continue;
             }

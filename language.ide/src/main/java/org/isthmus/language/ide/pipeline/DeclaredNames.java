@@ -23,9 +23,9 @@ record DeclaredNames(String namespace, Set<String> declared, Set<String> words) 
         int i = 0;
         while (i < text.length()) {
             char c = text.charAt(i);
-            if (Character.isJavaIdentifierStart(c)) {
+            if (startsWord(c)) {
                 int end = i + 1;
-                while (end < text.length() && Character.isJavaIdentifierPart(text.charAt(end))) {
+                while (end < text.length() && continuesWord(text.charAt(end))) {
                     end++;
                 }
                 String word = text.subSequence(i, end).toString();
@@ -43,12 +43,9 @@ record DeclaredNames(String namespace, Set<String> declared, Set<String> words) 
                 i = end;
                 continue;
             }
-            if (c == '/' && i + 1 < text.length() && (text.charAt(i + 1) == '/' || text.charAt(i + 1) == '*')) {
-                i = endOfComment(text, i);
-                continue;
-            }
-            if (c == '"') {
-                i = endOfString(text, i);
+            int skipped = endOfCommentOrString(text, i);
+            if (skipped > i) {
+                i = skipped;
                 continue;
             }
             if (c == '{') {
@@ -78,17 +75,29 @@ record DeclaredNames(String namespace, Set<String> declared, Set<String> words) 
         return false;
     }
 
+    /** Where the comment or string that starts here ends, or the start itself where none does. */
+    static int endOfCommentOrString(CharSequence text, int start) {
+        char c = text.charAt(start);
+        if (c == '"') {
+            return endOfString(text, start);
+        }
+        char next = c == '/' && start + 1 < text.length() ? text.charAt(start + 1) : 0;
+        return next == '/' || next == '*' ? endOfComment(text, start) : start;
+    }
+
+    /** One that does not end is none to the lexer either. */
     private static int endOfComment(CharSequence text, int start) {
         boolean line = text.charAt(start + 1) == '/';
         for (int i = start + 2; i < text.length(); i++) {
-            if (line && text.charAt(i) == '\n') {
+            char c = text.charAt(i);
+            if (line && (c == '\n' || c == '\r')) {
                 return i;
             }
-            if (!line && text.charAt(i) == '/' && text.charAt(i - 1) == '*' && i > start + 2) {
+            if (!line && c == '/' && text.charAt(i - 1) == '*' && i > start + 2) {
                 return i + 1;
             }
         }
-        return text.length();
+        return line ? text.length() : start;
     }
 
     private static int endOfString(CharSequence text, int start) {
@@ -96,10 +105,20 @@ record DeclaredNames(String namespace, Set<String> declared, Set<String> words) 
             char c = text.charAt(i);
             if (c == '\\') {
                 i++;
-            } else if (c == '"' || c == '\n') {
+            } else if (c == '"') {
                 return i + 1;
+            } else if (c == '\n' || c == '\r') {
+                return start;
             }
         }
-        return text.length();
+        return start;
+    }
+
+    static boolean startsWord(char c) {
+        return c >= 'a' && c <= 'z' || c >= 'A' && c <= 'Z' || c == '_';
+    }
+
+    static boolean continuesWord(char c) {
+        return startsWord(c) || c >= '0' && c <= '9';
     }
 }

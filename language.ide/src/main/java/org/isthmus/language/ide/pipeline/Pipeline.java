@@ -39,9 +39,9 @@ public final class Pipeline {
 
     /** Everything that the language has to say about the files asked for, in the order of files and lines. */
     public List<Finding> check(Project project, CancelIndicator cancel) {
-        List<Finding> findings = new ArrayList<>();
+        List<Finding> findings = new ArrayList<>(project.unread());
         IResourceValidator validator = injector.getInstance(IResourceValidator.class);
-        for (SourceFile file : project.asked()) {
+        for (SourceFile file : project.parsed()) {
             List<Finding> inFile = new ArrayList<>();
             for (Issue issue : validator.validate(project.resource(file), CheckMode.ALL, cancel)) {
                 inFile.add(finding(file, issue));

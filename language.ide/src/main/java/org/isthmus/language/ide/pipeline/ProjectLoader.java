@@ -10,18 +10,17 @@ import java.util.Deque;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
+import java.util.Optional;
 import org.eclipse.emf.common.util.URI;
 import org.eclipse.xtext.resource.XtextResource;
 import org.eclipse.xtext.resource.XtextResourceSet;
+import org.isthmus.runtime.device.Finding;
 
 /**
  * Parses the files asked for, and of the project's others those whose names they use, directly or through each other.
  * A project may hold many files that have nothing to do with a run, broken ones among them.
  */
 final class ProjectLoader {
-    /** A larger file is not looked at for the sake of others' names. */
-    private static final long LARGEST_OTHER = 4L << 20;
-
     private final Injector injector;
 
     ProjectLoader(Injector injector) {
@@ -31,15 +30,26 @@ final class ProjectLoader {
     Project load(ProjectFiles files) throws MissingInput {
         XtextResourceSet resources = injector.getInstance(XtextResourceSet.class);
         Map<SourceFile, XtextResource> asked = new LinkedHashMap<>();
+        List<Finding> unread = new ArrayList<>();
         Deque<DeclaredNames> open = new ArrayDeque<>();
         for (SourceFile file : files.asked()) {
-            asked.put(file, parse(resources, file));
-            open.add(DeclaredNames.scan(read(file)));
+            Optional<Finding> tooLarge = SourceLimits.ofSize(file, size(file));
+            String text = tooLarge.isPresent() ? "" : read(file);
+            Optional<Finding> limit = tooLarge.or(() -> SourceLimits.ofText(file, text));
+            if (limit.isPresent()) {
+                unread.add(limit.get());
+            } else {
+                asked.put(file, parse(resources, file));
+                open.add(DeclaredNames.scan(text));
+            }
         }
         Map<SourceFile, DeclaredNames> candidates = new LinkedHashMap<>();
         for (SourceFile file : files.others()) {
-            if (file.path().toFile().length() <= LARGEST_OTHER) {
-                candidates.put(file, DeclaredNames.scan(read(file)));
+            if (SourceLimits.ofSize(file, size(file)).isEmpty()) {
+                String text = read(file);
+                if (SourceLimits.ofText(file, text).isEmpty()) {
+                    candidates.put(file, DeclaredNames.scan(text));
+                }
             }
         }
         while (!open.isEmpty() && !candidates.isEmpty()) {
@@ -55,12 +65,16 @@ final class ProjectLoader {
                 parse(resources, file);
             }
         }
-        return new Project(files, resources, asked);
+        return new Project(files, resources, asked, unread);
     }
 
     private static XtextResource parse(XtextResourceSet resources, SourceFile file) {
         URI uri = URI.createFileURI(file.path().toString());
         return (XtextResource) resources.getResource(uri, true);
+    }
+
+    private static long size(SourceFile file) {
+        return file.path().toFile().length();
     }
 
     private static String read(SourceFile file) throws MissingInput {
