@@ -50,7 +50,7 @@ final class CheckCommand implements Callable<Integer> {
         List<Finding> findings = pipeline.check(project, CancelIndicator.NullImpl);
         FindingWriter.write(findings, format, spec.commandLine().getOut());
         if (format == FindingFormat.text) {
-            int files = project.files().asked().size();
+            int files = project.size();
             spec.commandLine()
                     .getErr()
                     .println(FindingWriter.summary(findings) + " in " + files + (files == 1 ? " file." : " files."));

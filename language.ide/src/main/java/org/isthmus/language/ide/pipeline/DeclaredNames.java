@@ -13,10 +13,11 @@ import java.util.Set;
 record DeclaredNames(String namespace, Set<String> declared, Set<String> words) {
     private static final Set<String> KINDS = Set.of("let", "material", "lattice", "device", "measurement");
 
-    static DeclaredNames scan(CharSequence text) {
+    static DeclaredNames scan(String text) {
         Set<String> declared = new LinkedHashSet<>();
         Set<String> words = new LinkedHashSet<>();
         StringBuilder namespace = new StringBuilder();
+        Skipped comments = new Skipped(text);
         boolean inNamespace = false;
         String before = "";
         int depth = 0;
@@ -28,7 +29,7 @@ record DeclaredNames(String namespace, Set<String> declared, Set<String> words) 
                 while (end < text.length() && continuesWord(text.charAt(end))) {
                     end++;
                 }
-                String word = text.subSequence(i, end).toString();
+                String word = text.substring(i, end);
                 if (inNamespace) {
                     namespace.append(word);
                 } else if (depth == 0 && word.equals("namespace")) {
@@ -43,7 +44,7 @@ record DeclaredNames(String namespace, Set<String> declared, Set<String> words) 
                 i = end;
                 continue;
             }
-            int skipped = endOfCommentOrString(text, i);
+            int skipped = comments.end(i);
             if (skipped > i) {
                 i = skipped;
                 continue;
@@ -73,45 +74,6 @@ record DeclaredNames(String namespace, Set<String> declared, Set<String> words) 
             }
         }
         return false;
-    }
-
-    /** Where the comment or string that starts here ends, or the start itself where none does. */
-    static int endOfCommentOrString(CharSequence text, int start) {
-        char c = text.charAt(start);
-        if (c == '"') {
-            return endOfString(text, start);
-        }
-        char next = c == '/' && start + 1 < text.length() ? text.charAt(start + 1) : 0;
-        return next == '/' || next == '*' ? endOfComment(text, start) : start;
-    }
-
-    /** One that does not end is none to the lexer either. */
-    private static int endOfComment(CharSequence text, int start) {
-        boolean line = text.charAt(start + 1) == '/';
-        for (int i = start + 2; i < text.length(); i++) {
-            char c = text.charAt(i);
-            if (line && (c == '\n' || c == '\r')) {
-                return i;
-            }
-            if (!line && c == '/' && text.charAt(i - 1) == '*' && i > start + 2) {
-                return i + 1;
-            }
-        }
-        return line ? text.length() : start;
-    }
-
-    private static int endOfString(CharSequence text, int start) {
-        for (int i = start + 1; i < text.length(); i++) {
-            char c = text.charAt(i);
-            if (c == '\\') {
-                i++;
-            } else if (c == '"') {
-                return i + 1;
-            } else if (c == '\n' || c == '\r') {
-                return start;
-            }
-        }
-        return start;
     }
 
     static boolean startsWord(char c) {

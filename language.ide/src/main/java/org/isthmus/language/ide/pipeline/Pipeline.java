@@ -15,6 +15,7 @@ import org.eclipse.xtext.validation.CheckMode;
 import org.eclipse.xtext.validation.IResourceValidator;
 import org.eclipse.xtext.validation.Issue;
 import org.isthmus.language.IsthmusStandaloneSetup;
+import org.isthmus.language.findings.IssueCode;
 import org.isthmus.language.formatting.FileLayout;
 import org.isthmus.runtime.device.Finding;
 import org.isthmus.runtime.device.SourceRef;
@@ -34,7 +35,7 @@ public final class Pipeline {
      * @throws MissingInput where one of them is not there
      */
     public Project load(List<Path> paths) throws MissingInput {
-        return new ProjectLoader(injector).load(ProjectFiles.find(paths));
+        return new ProjectLoader(injector).load(paths);
     }
 
     /** Everything that the language has to say about the files asked for, in the order of files and lines. */
@@ -59,8 +60,8 @@ public final class Pipeline {
             if (error instanceof XtextSyntaxDiagnostic syntax) {
                 SourceRef place = new SourceRef(
                         file.shown(), syntax.getLine(), syntax.getColumn(), syntax.getOffset(), syntax.getLength());
-                findings.add(
-                        new Finding("syntax", org.isthmus.runtime.device.Severity.ERROR, syntax.getMessage(), place));
+                findings.add(new Finding(
+                        IssueCode.SYNTAX.id(), org.isthmus.runtime.device.Severity.ERROR, syntax.getMessage(), place));
             }
         }
         return findings;

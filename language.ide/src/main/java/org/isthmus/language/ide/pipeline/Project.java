@@ -1,52 +1,90 @@
 package org.isthmus.language.ide.pipeline;
 
+import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
+import java.util.Optional;
+import org.eclipse.emf.common.util.URI;
 import org.eclipse.xtext.resource.XtextResource;
 import org.eclipse.xtext.resource.XtextResourceSet;
 import org.isthmus.runtime.device.Finding;
+import org.isthmus.runtime.device.SourceRef;
 
 /**
- * Parsed files, ready for the checks: those asked for and those that their names lead to.
+ * Parsed files, ready for the checks: those asked for and those that their names lead to. What was given as one path sees
+ * its own files only, so that unrelated files cannot get into each other's way.
  *
  * <p>The syntax model is read only from here on.
  */
 public final class Project {
-    private final ProjectFiles files;
-    private final XtextResourceSet resources;
-    private final Map<SourceFile, XtextResource> asked;
-    private final List<Finding> unread;
+    private final List<Part> parts;
+    private final Map<String, String> shown;
 
-    Project(
-            ProjectFiles files,
+    Project(List<Part> parts) {
+        this.parts = List.copyOf(parts);
+        shown = new LinkedHashMap<>();
+        for (Part part : parts) {
+            part.others().forEach(file -> shown.put(file.path().toString(), file.shown()));
+        }
+        for (Part part : parts) {
+            part.asked().keySet().forEach(file -> shown.put(file.path().toString(), file.shown()));
+        }
+    }
+
+    /**
+     * One path's files.
+     *
+     * @param asked those that the request is about and that could be parsed, in its order
+     * @param others those that their names led to
+     * @param unread why files that were asked for could not even be parsed
+     */
+    record Part(
             XtextResourceSet resources,
             Map<SourceFile, XtextResource> asked,
-            List<Finding> unread) {
-        this.files = files;
-        this.resources = resources;
-        this.asked = asked;
-        this.unread = List.copyOf(unread);
-    }
+            List<SourceFile> others,
+            List<Finding> unread) {}
 
-    /** Why files that were asked for could not even be parsed. */
-    public List<Finding> unread() {
-        return unread;
-    }
-
-    public ProjectFiles files() {
-        return files;
-    }
-
-    XtextResourceSet resources() {
-        return resources;
+    List<Part> parts() {
+        return parts;
     }
 
     /** The files that the request is about and that could be parsed, in its order. */
     public List<SourceFile> parsed() {
-        return List.copyOf(asked.keySet());
+        return parts.stream().flatMap(p -> p.asked().keySet().stream()).toList();
+    }
+
+    /** Number of files that the request is about. */
+    public int size() {
+        return parts.stream()
+                .mapToInt(p -> p.asked().size() + p.unread().size())
+                .sum();
+    }
+
+    /** Why files could not even be parsed. */
+    public List<Finding> unread() {
+        return parts.stream().flatMap(p -> p.unread().stream()).toList();
     }
 
     XtextResource resource(SourceFile file) {
-        return asked.get(file);
+        return parts.stream()
+                .map(p -> p.asked().get(file))
+                .filter(r -> r != null)
+                .findFirst()
+                .orElseThrow();
+    }
+
+    /** The same finding with its file named as the user gave it. */
+    Finding shown(Finding finding) {
+        SourceRef place = finding.place();
+        String file = place.file();
+        String path = file.startsWith("file:") ? URI.createURI(file).toFileString() : file;
+        String name = Optional.ofNullable(shown.get(path)).orElse(path);
+        return name.equals(file)
+                ? finding
+                : new Finding(
+                        finding.code(),
+                        finding.severity(),
+                        finding.text(),
+                        new SourceRef(name, place.line(), place.column(), place.offset(), place.length()));
     }
 }

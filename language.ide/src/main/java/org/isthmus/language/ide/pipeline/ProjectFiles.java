@@ -10,21 +10,18 @@ import java.nio.file.attribute.BasicFileAttributes;
 import java.util.ArrayList;
 import java.util.Comparator;
 import java.util.EnumSet;
-import java.util.LinkedHashMap;
 import java.util.List;
-import java.util.Map;
-import java.util.Set;
-import java.util.TreeSet;
+import java.util.Optional;
 
 /**
- * Which files a request is about, and which others their names may come from.
+ * Which files a path means, and which others their names may come from.
  *
- * @param folder the project: a folder that was given, or the nearest one above the first file that holds {@code .git}
- *     or {@code isthmus.project}, else that file's own
- * @param asked what the request is about, in the order given, a folder's files sorted by path
- * @param others further files of the projects concerned, sorted by path
+ * @param given the folder, where the path is one
+ * @param asked what the path means, a folder's files sorted by path
+ * @param others further files of the project, sorted by path: the project is the given folder, or the nearest one above
+ *     the file that holds {@code .git} or {@code isthmus.project}, else the file's own folder
  */
-public record ProjectFiles(Path folder, List<SourceFile> asked, List<SourceFile> others) {
+public record ProjectFiles(Optional<Path> given, List<SourceFile> asked, List<SourceFile> others) {
     /** What files of the language end with. */
     public static final String EXTENSION = ".isth";
 
@@ -45,49 +42,39 @@ public record ProjectFiles(Path folder, List<SourceFile> asked, List<SourceFile>
     /**
      * Looks the files up.
      *
-     * @param given files and folders as the user named them, not empty
-     * @throws MissingInput where one does not exist or holds nothing of the language
+     * @param path a file or folder as the user named it
+     * @throws MissingInput where it does not exist or holds nothing of the language
      */
-    public static ProjectFiles find(List<Path> given) throws MissingInput {
-        Map<Path, SourceFile> asked = new LinkedHashMap<>();
-        Set<Path> folders = new TreeSet<>();
-        Path first = null;
-        for (Path path : given) {
-            Path absolute = path.toAbsolutePath().normalize();
-            Path project;
-            if (Files.isDirectory(path)) {
-                List<Path> found = below(absolute);
-                if (found.isEmpty()) {
-                    throw new MissingInput("folder '" + path + "' holds no " + EXTENSION + " file.");
-                }
-                for (Path file : found) {
-                    String shown =
-                            path.resolve(absolute.relativize(file)).normalize().toString();
-                    asked.putIfAbsent(file, new SourceFile(file, shown));
-                }
-                project = absolute;
-            } else if (!Files.exists(path)) {
-                throw new MissingInput("there is no file or folder '" + path + "'.");
-            } else if (!path.getFileName().toString().endsWith(EXTENSION)) {
-                throw new MissingInput("'" + path + "' is no " + EXTENSION + " file.");
-            } else if (!Files.isReadable(path)) {
-                throw new MissingInput("'" + path + "' may not be read; look at its permissions.");
-            } else {
-                asked.putIfAbsent(absolute, new SourceFile(absolute, path.toString()));
-                project = projectOf(absolute);
+    public static ProjectFiles find(Path path) throws MissingInput {
+        Path absolute = path.toAbsolutePath().normalize();
+        if (Files.isDirectory(path)) {
+            List<SourceFile> asked = new ArrayList<>();
+            for (Path file : below(absolute)) {
+                String shown =
+                        path.resolve(absolute.relativize(file)).normalize().toString();
+                asked.add(new SourceFile(file, shown));
             }
-            folders.add(project);
-            first = first == null ? project : first;
+            if (asked.isEmpty()) {
+                throw new MissingInput("folder '" + path + "' holds no " + EXTENSION + " file.");
+            }
+            return new ProjectFiles(Optional.of(absolute), asked, List.of());
         }
-        Map<Path, SourceFile> others = new LinkedHashMap<>();
-        for (Path folder : folders) {
-            for (Path file : below(folder)) {
-                if (!asked.containsKey(file)) {
-                    others.putIfAbsent(file, new SourceFile(file, shownFromHere(file)));
-                }
+        if (!Files.exists(path)) {
+            throw new MissingInput("there is no file or folder '" + path + "'.");
+        }
+        if (!path.getFileName().toString().endsWith(EXTENSION)) {
+            throw new MissingInput("'" + path + "' is no " + EXTENSION + " file.");
+        }
+        if (!Files.isReadable(path)) {
+            throw new MissingInput("'" + path + "' may not be read; look at its permissions.");
+        }
+        List<SourceFile> others = new ArrayList<>();
+        for (Path file : below(projectOf(absolute))) {
+            if (!file.equals(absolute)) {
+                others.add(new SourceFile(file, shownFromHere(file)));
             }
         }
-        return new ProjectFiles(first, List.copyOf(asked.values()), List.copyOf(others.values()));
+        return new ProjectFiles(Optional.empty(), List.of(new SourceFile(absolute, path.toString())), others);
     }
 
     /** The folder of the project that a file belongs to. */

@@ -4,16 +4,20 @@ import com.google.inject.Injector;
 import java.io.IOException;
 import java.nio.charset.StandardCharsets;
 import java.nio.file.Files;
+import java.nio.file.Path;
 import java.util.ArrayDeque;
 import java.util.ArrayList;
 import java.util.Deque;
+import java.util.HashSet;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
+import java.util.Set;
 import org.eclipse.emf.common.util.URI;
 import org.eclipse.xtext.resource.XtextResource;
 import org.eclipse.xtext.resource.XtextResourceSet;
+import org.isthmus.language.tables.TableFiles;
 import org.isthmus.runtime.device.Finding;
 
 /**
@@ -27,12 +31,26 @@ final class ProjectLoader {
         this.injector = injector;
     }
 
-    Project load(ProjectFiles files) throws MissingInput {
+    Project load(List<Path> paths) throws MissingInput {
+        List<Project.Part> parts = new ArrayList<>();
+        Set<Path> seen = new HashSet<>();
+        for (Path path : paths) {
+            parts.add(part(ProjectFiles.find(path), seen));
+        }
+        return new Project(parts);
+    }
+
+    private Project.Part part(ProjectFiles files, Set<Path> seen) throws MissingInput {
         XtextResourceSet resources = injector.getInstance(XtextResourceSet.class);
+        files.given().ifPresent(folder -> resources.getLoadOptions().put(TableFiles.PROJECT_FOLDER, folder));
         Map<SourceFile, XtextResource> asked = new LinkedHashMap<>();
+        List<SourceFile> others = new ArrayList<>();
         List<Finding> unread = new ArrayList<>();
         Deque<DeclaredNames> open = new ArrayDeque<>();
         for (SourceFile file : files.asked()) {
+            if (!seen.add(file.path())) {
+                continue;
+            }
             Optional<Finding> tooLarge = SourceLimits.ofSize(file, size(file));
             String text = tooLarge.isPresent() ? "" : read(file);
             Optional<Finding> limit = tooLarge.or(() -> SourceLimits.ofText(file, text));
@@ -54,18 +72,17 @@ final class ProjectLoader {
         }
         while (!open.isEmpty() && !candidates.isEmpty()) {
             DeclaredNames user = open.remove();
-            List<SourceFile> used = new ArrayList<>();
-            candidates.forEach((file, names) -> {
-                if (user.mayUse(names)) {
-                    used.add(file);
-                }
-            });
+            List<SourceFile> used = candidates.entrySet().stream()
+                    .filter(candidate -> user.mayUse(candidate.getValue()))
+                    .map(Map.Entry::getKey)
+                    .toList();
             for (SourceFile file : used) {
                 open.add(candidates.remove(file));
                 parse(resources, file);
+                others.add(file);
             }
         }
-        return new Project(files, resources, asked, unread);
+        return new Project.Part(resources, asked, others, unread);
     }
 
     private static XtextResource parse(XtextResourceSet resources, SourceFile file) {

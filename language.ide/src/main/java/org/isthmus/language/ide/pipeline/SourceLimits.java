@@ -3,6 +3,7 @@ package org.isthmus.language.ide.pipeline;
 import java.util.ArrayDeque;
 import java.util.Deque;
 import java.util.Optional;
+import org.isthmus.language.findings.IssueCode;
 import org.isthmus.runtime.device.Finding;
 import org.isthmus.runtime.device.Severity;
 import org.isthmus.runtime.device.SourceRef;
@@ -22,12 +23,12 @@ final class SourceLimits {
     static final int LONGEST_EXPRESSION = 1000;
 
     private final String shown;
-    private final CharSequence text;
+    private final String text;
     private final Deque<Integer> operatorsOutside = new ArrayDeque<>();
     private int operators;
     private int outside;
 
-    private SourceLimits(String shown, CharSequence text) {
+    private SourceLimits(String shown, String text) {
         this.shown = shown;
         this.text = text;
     }
@@ -37,7 +38,7 @@ final class SourceLimits {
         return bytes <= LARGEST_FILE
                 ? Optional.empty()
                 : Optional.of(new Finding(
-                        "file-too-large",
+                        IssueCode.UNREADABLE_TEXT.id(),
                         Severity.ERROR,
                         "The file has " + bytes + " bytes, a device file may have " + LARGEST_FILE
                                 + "; tables of numbers belong into CSV files.",
@@ -45,15 +46,16 @@ final class SourceLimits {
     }
 
     /** The first finding that keeps a text from being parsed. */
-    static Optional<Finding> ofText(SourceFile file, CharSequence text) {
+    static Optional<Finding> ofText(SourceFile file, String text) {
         return new SourceLimits(file.shown(), text).scan();
     }
 
     private Optional<Finding> scan() {
+        Skipped comments = new Skipped(text);
         boolean spaced = true;
         for (int i = 0; i < text.length(); i++) {
             char c = text.charAt(i);
-            int skipped = DeclaredNames.endOfCommentOrString(text, i);
+            int skipped = comments.end(i);
             if (skipped > i) {
                 i = skipped - 1;
                 spaced = true;
@@ -66,7 +68,6 @@ final class SourceLimits {
                     operators = 0;
                     if (operatorsOutside.size() > DEEPEST_NESTING) {
                         return finding(
-                                "nesting-too-deep",
                                 "Brackets stand " + operatorsOutside.size() + " deep here, at most " + DEEPEST_NESTING
                                         + " are read; name inner parts with 'let'.",
                                 i);
@@ -88,7 +89,6 @@ final class SourceLimits {
             spaced = !DeclaredNames.continuesWord(c);
             if (outside + operators > LONGEST_EXPRESSION) {
                 return finding(
-                        "expression-too-long",
                         "This expression has more than " + LONGEST_EXPRESSION
                                 + " operators; name parts of it with 'let', or use a table.",
                         i);
@@ -100,11 +100,11 @@ final class SourceLimits {
     private boolean startsWord(int start, String word) {
         int end = start + word.length();
         return end <= text.length()
-                && text.subSequence(start, end).toString().equals(word)
+                && text.startsWith(word, start)
                 && (end == text.length() || !DeclaredNames.continuesWord(text.charAt(end)));
     }
 
-    private Optional<Finding> finding(String code, String message, int offset) {
+    private Optional<Finding> finding(String message, int offset) {
         int line = 1;
         int start = 0;
         for (int i = 0; i < offset; i++) {
@@ -114,6 +114,6 @@ final class SourceLimits {
             }
         }
         SourceRef place = new SourceRef(shown, line, offset - start + 1, offset, 1);
-        return Optional.of(new Finding(code, Severity.ERROR, message, place));
+        return Optional.of(new Finding(IssueCode.UNREADABLE_TEXT.id(), Severity.ERROR, message, place));
     }
 }

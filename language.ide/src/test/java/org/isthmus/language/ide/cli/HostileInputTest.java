@@ -26,6 +26,8 @@ class HostileInputTest {
                 "unary in brackets",
                 "hidden in an open string",
                 "hidden in an open comment",
+                "open comments",
+                "open strings",
                 "long sum",
                 "five megabytes in a line",
                 "long word",
@@ -42,6 +44,8 @@ class HostileInputTest {
                     case "unary in brackets" -> text("let a = " + ("-".repeat(900) + "(").repeat(190) + "1;");
                     case "hidden in an open string" -> text("let a = \"" + "(".repeat(100_000) + "\n;");
                     case "hidden in an open comment" -> text("let a = /*" + "(".repeat(100_000) + "\n;");
+                    case "open comments" -> text("let a = " + "/*".repeat(400_000));
+                    case "open strings" -> text("let a = " + "\"\\".repeat(400_000));
                     case "long sum" -> text("let a = 1" + " + 1".repeat(200_000) + ";");
                     case "five megabytes in a line" -> text("let a = 1" + "+1".repeat(2_500_000) + ";");
                     case "long word" -> text("let a = " + "x".repeat(1_000_000) + ";");

@@ -5,6 +5,7 @@ import static org.junit.jupiter.api.Assertions.assertEquals;
 import java.nio.file.Files;
 import java.nio.file.Path;
 import java.util.List;
+import java.util.Optional;
 import org.junit.jupiter.api.BeforeEach;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.api.io.TempDir;
@@ -28,7 +29,7 @@ class ProjectFilesTest {
         assertEquals(folder.resolve("project/inner"), ProjectFiles.projectOf(file));
         Files.writeString(folder.resolve("project/isthmus.project"), "");
         assertEquals(folder.resolve("project"), ProjectFiles.projectOf(file));
-        ProjectFiles found = ProjectFiles.find(List.of(file));
+        ProjectFiles found = ProjectFiles.find(file);
         assertEquals(List.of(file), paths(found.asked()));
         assertEquals(List.of(folder.resolve("project/a.isth")), paths(found.others()));
     }
@@ -42,20 +43,12 @@ class ProjectFilesTest {
     @Test
     void aGivenFolderIsTheProject() throws Exception {
         Files.createDirectories(folder.resolve(".git"));
-        ProjectFiles found = ProjectFiles.find(List.of(folder.resolve("project")));
-        assertEquals(folder.resolve("project"), found.folder());
+        ProjectFiles found = ProjectFiles.find(folder.resolve("project"));
+        assertEquals(Optional.of(folder.resolve("project")), found.given());
         assertEquals(
                 List.of(folder.resolve("project/a.isth"), folder.resolve("project/inner/b.isth")),
                 paths(found.asked()));
         assertEquals(List.of(), found.others());
-    }
-
-    @Test
-    void aFileGivenTwiceCountsOnce() throws Exception {
-        Path file = folder.resolve("project/a.isth");
-        ProjectFiles found = ProjectFiles.find(List.of(file, folder.resolve("project/inner/../a.isth")));
-        assertEquals(1, found.asked().size());
-        assertEquals(file.toString(), found.asked().get(0).shown());
     }
 
     private static List<Path> paths(List<SourceFile> files) {
