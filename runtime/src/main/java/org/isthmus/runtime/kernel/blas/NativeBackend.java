@@ -92,10 +92,12 @@ public final class NativeBackend implements ComplexBackend {
     @Override
     public Factors factor(ComplexMatrix a) {
         int n = square(a);
-        double norm = n == 0 ? 0 : openblas_full.LAPACKE_zlange(openblas_full.LAPACK_COL_MAJOR, ONE_NORM, n, n, a.data(), n);
+        double norm =
+                n == 0 ? 0 : openblas_full.LAPACKE_zlange(openblas_full.LAPACK_COL_MAJOR, ONE_NORM, n, n, a.data(), n);
         ComplexMatrix lu = a.copy();
         int[] pivots = new int[n];
-        int info = n == 0 ? 0 : openblas_full.LAPACKE_zgetrf(openblas_full.LAPACK_COL_MAJOR, n, n, lu.data(), n, pivots);
+        int info =
+                n == 0 ? 0 : openblas_full.LAPACKE_zgetrf(openblas_full.LAPACK_COL_MAJOR, n, n, lu.data(), n, pivots);
         if (info > 0) {
             throw new SingularMatrixException("pivot " + info + " of " + n + " is zero");
         }
@@ -128,7 +130,8 @@ public final class NativeBackend implements ComplexBackend {
             }
             double[] reciprocal = new double[1];
             check(
-                    openblas_full.LAPACKE_zgecon(openblas_full.LAPACK_COL_MAJOR, ONE_NORM, n, lu.data(), n, norm, reciprocal),
+                    openblas_full.LAPACKE_zgecon(
+                            openblas_full.LAPACK_COL_MAJOR, ONE_NORM, n, lu.data(), n, norm, reciprocal),
                     "zgecon");
             return reciprocal[0];
         }
@@ -141,7 +144,8 @@ public final class NativeBackend implements ComplexBackend {
         double[] values = new double[n];
         if (n > 0) {
             check(
-                    openblas_full.LAPACKE_zheevd(openblas_full.LAPACK_COL_MAJOR, YES, UPPER, n, vectors.data(), n, values),
+                    openblas_full.LAPACKE_zheevd(
+                            openblas_full.LAPACK_COL_MAJOR, YES, UPPER, n, vectors.data(), n, values),
                     "zheevd");
         }
         return new HermitianEigen(values, vectors);
