@@ -1,0 +1,248 @@
+package org.isthmus.runtime.solve;
+
+import java.util.ArrayList;
+import java.util.Arrays;
+import java.util.List;
+import org.isthmus.runtime.device.Device;
+import org.isthmus.runtime.device.HoppingTable;
+import org.isthmus.runtime.device.SiteTable;
+import org.isthmus.runtime.kernel.ComplexBackend;
+import org.isthmus.runtime.kernel.ComplexMatrix;
+import org.isthmus.runtime.kernel.SingularMatrixException;
+import org.isthmus.runtime.plan.SolvePlan;
+import org.isthmus.runtime.selfenergy.Contact;
+import org.isthmus.runtime.selfenergy.OutsideTableException;
+import org.isthmus.runtime.solve.Elimination.Remainder;
+
+/** Executes a plan: everything that no lead touches is eliminated, then the leads are coupled to what is left. */
+final class FrontalSolver implements Solver {
+    /** A solution whose own equations are fulfilled no better than this is not given out. */
+    private static final double TRUSTWORTHY = 1e-5;
+
+    private static final double UNCOUPLED = 1e-9;
+
+    private final OperatingPoint point;
+    private final SolvePlan plan;
+    private final List<Contact> contacts;
+    private final ComplexBackend backend;
+    private final Entries entries;
+    private final int[] siteOf;
+    private final ThreadLocal<int[]> where;
+
+    FrontalSolver(OperatingPoint point, SolvePlan plan, List<Contact> contacts, ComplexBackend backend) {
+        this.point = point;
+        this.plan = plan;
+        this.contacts = List.copyOf(contacts);
+        this.backend = backend;
+        entries = new Entries(point, plan);
+        SiteTable sites = point.device().sites();
+        siteOf = new int[sites.orbitalCount()];
+        for (int site = 0; site < sites.count(); site++) {
+            Arrays.fill(siteOf, sites.firstOrbital(site), sites.firstOrbital(site + 1), site);
+        }
+        where = ThreadLocal.withInitial(() -> new int[plan.orbitals()]);
+    }
+
+    @Override
+    public OperatingPoint operatingPoint() {
+        return point;
+    }
+
+    @Override
+    public EnergySolution solve(double energy, Needs needs) {
+        Coupled coupled = couple(energy, 0, needs.sites());
+        int n = contacts.size();
+        ComplexMatrix[] broadening = new ComplexMatrix[n];
+        for (int p = 0; p < n; p++) {
+            broadening[p] = LeadTraces.broadening(coupled.sigmas[p].sigma());
+        }
+        LeadTraces traces = new LeadTraces(backend, coupled.green, coupled.places, broadening);
+        double[][] byLead = null;
+        double[] total = null;
+        if (needs.sites()) {
+            SiteSweep sweep = sweep();
+            byLead = sweep.spectral(coupled.remainder, coupled.green, coupled.places, broadening);
+            double[] diagonal = sweep.diagonal(coupled.remainder, coupled.green);
+            total = new double[diagonal.length / 2];
+            for (int site = 0; site < total.length; site++) {
+                total[site] = -2 * diagonal[2 * site + 1];
+            }
+        }
+        int[] modes = new int[n];
+        for (int p = 0; p < n; p++) {
+            modes[p] = coupled.sigmas[p].openModes();
+        }
+        return new CoherentSolution(
+                energy,
+                traces.transmissions(),
+                traces.spectralTraces(),
+                modes,
+                needs.correlators() ? traces.correlators() : null,
+                byLead,
+                total,
+                coupled.residual);
+    }
+
+    @Override
+    public double[] siteGreens(double real, double imaginary) {
+        if (!(imaginary > 0)) {
+            throw new IllegalArgumentException("the contour lies above the real axis, not at " + imaginary + " eV");
+        }
+        Coupled coupled = couple(real, imaginary, true);
+        return sweep().diagonal(coupled.remainder, coupled.green);
+    }
+
+    private SiteSweep sweep() {
+        return new SiteSweep(plan, entries, point.device().sites(), backend, siteOf, where.get());
+    }
+
+    private record Coupled(
+            Remainder remainder, ComplexMatrix green, Contact.SelfEnergy[] sigmas, int[][] places, double residual) {}
+
+    private Coupled couple(double real, double imaginary, boolean keep) {
+        Remainder remainder = new Elimination(plan, entries, backend, real, imaginary, keep, where.get()).run();
+        ComplexMatrix matrix = remainder.matrix().copy();
+        int[] index = where.get();
+        for (int i = 0; i < remainder.orbitals().length; i++) {
+            index[remainder.orbitals()[i]] = i;
+        }
+        Contact.SelfEnergy[] sigmas = new Contact.SelfEnergy[contacts.size()];
+        int[][] places = new int[contacts.size()][];
+        double residual = 0;
+        for (int p = 0; p < sigmas.length; p++) {
+            sigmas[p] = selfEnergy(p, real, imaginary);
+            places[p] =
+                    Arrays.stream(contacts.get(p).orbitals()).map(o -> index[o]).toArray();
+            ComplexMatrix minus = sigmas[p].sigma().copy();
+            minus.scale(-1, 0);
+            matrix.scatterAdd(minus, places[p], places[p]);
+            residual = Math.max(residual, sigmas[p].residual());
+        }
+        ComplexMatrix green = inverse(matrix, real);
+        ComplexMatrix unit = backend.multiply(matrix, green);
+        unit.addScaled(ComplexMatrix.identity(matrix.rows()), -1);
+        residual = Math.max(residual, matrix.rows() == 0 ? 0 : unit.frobenius() / matrix.rows());
+        if (!(residual < TRUSTWORTHY) || !green.finite()) {
+            throw new SolveFailure("At " + real + " eV the equations of device '"
+                    + point.device().name() + "' are fulfilled to " + residual
+                    + " only; move the energy a little, away from a band edge or a bound state.");
+        }
+        return new Coupled(remainder, green, sigmas, places, residual);
+    }
+
+    private Contact.SelfEnergy selfEnergy(int lead, double real, double imaginary) {
+        try {
+            return contacts.get(lead).at(real - point.leads().get(lead).bandShift(), imaginary);
+        } catch (OutsideTableException e) {
+            throw new SolveFailure(e.getMessage(), e);
+        } catch (ArithmeticException | SingularMatrixException e) {
+            throw new SolveFailure(
+                    "The self-energy of lead '"
+                            + point.device().leads().get(lead).name() + "' was not found at " + real + " eV: "
+                            + e.getMessage() + ".",
+                    e);
+        }
+    }
+
+    /** G of what is left; a level that nothing couples to, handed on to here, is left out. */
+    private ComplexMatrix inverse(ComplexMatrix matrix, double energy) {
+        try {
+            return backend.inverse(matrix);
+        } catch (SingularMatrixException e) {
+            int contactOrbitals = plan.root().orbitals().length;
+            int n = matrix.rows();
+            int[] coupled = java.util.stream.IntStream.range(0, n)
+                    .filter(i -> i < contactOrbitals || rowSize(matrix, i) > UNCOUPLED)
+                    .toArray();
+            if (coupled.length == n) {
+                throw new SolveFailure(
+                        "A state of device '" + point.device().name() + "' that no lead reaches lies exactly at "
+                                + energy + " eV; move the energy a little.",
+                        e);
+            }
+            ComplexMatrix green = ComplexMatrix.zeros(n, n);
+            green.scatterAdd(inverse(matrix.select(coupled, coupled), energy), coupled, coupled);
+            for (int i = contactOrbitals; i < n; i++) {
+                if (rowSize(matrix, i) <= UNCOUPLED) {
+                    matrix.set(i, i, 1, 0);
+                    green.set(i, i, 1, 0);
+                }
+            }
+            return green;
+        }
+    }
+
+    private static double rowSize(ComplexMatrix matrix, int row) {
+        double size = 0;
+        for (int j = 0; j < matrix.columns(); j++) {
+            size = Math.max(size, Math.hypot(matrix.real(row, j), matrix.imaginary(row, j)));
+        }
+        return size;
+    }
+
+    @Override
+    public List<Double> modeOpenings() {
+        List<Double> openings = new ArrayList<>();
+        for (int p = 0; p < contacts.size(); p++) {
+            double shift = point.leads().get(p).bandShift();
+            contacts.get(p).modeOpenings().forEach(e -> openings.add(e + shift));
+        }
+        openings.sort(Double::compare);
+        List<Double> distinct = new ArrayList<>();
+        for (double e : openings) {
+            if (distinct.isEmpty() || e - distinct.get(distinct.size() - 1) > 1e-9) {
+                distinct.add(e);
+            }
+        }
+        return distinct;
+    }
+
+    @Override
+    public double[] spectrumBounds() {
+        double[] bounds = bodyBounds();
+        for (int p = 0; p < contacts.size(); p++) {
+            double[] bands = contacts.get(p).bandBounds();
+            if (bands.length == 2) {
+                double shift = point.leads().get(p).bandShift();
+                bounds[0] = Math.min(bounds[0], bands[0] + shift);
+                bounds[1] = Math.max(bounds[1], bands[1] + shift);
+            }
+        }
+        return bounds;
+    }
+
+    /** Gershgorin's circles of the body. */
+    private double[] bodyBounds() {
+        Device device = point.device();
+        SiteTable sites = device.sites();
+        double[] radius = new double[sites.orbitalCount()];
+        HoppingTable bonds = device.hoppings();
+        for (int b = 0; b < bonds.count(); b++) {
+            for (int i = 0; i < sites.orbitals(bonds.from(b)); i++) {
+                for (int j = 0; j < sites.orbitals(bonds.to(b)); j++) {
+                    double size = Math.hypot(bonds.real(b, i, j), bonds.imaginary(b, i, j));
+                    radius[sites.firstOrbital(bonds.from(b)) + i] += size;
+                    radius[sites.firstOrbital(bonds.to(b)) + j] += size;
+                }
+            }
+        }
+        double[] bounds = {Double.POSITIVE_INFINITY, Double.NEGATIVE_INFINITY};
+        for (int site = 0; site < sites.count(); site++) {
+            for (int i = 0; i < sites.orbitals(site); i++) {
+                double r = radius[sites.firstOrbital(site) + i];
+                for (int j = 0; j < sites.orbitals(site); j++) {
+                    r += i == j ? 0 : Math.hypot(sites.onSiteReal(site, i, j), sites.onSiteImaginary(site, i, j));
+                }
+                double centre = sites.onSiteReal(site, i, i) + point.shift(site);
+                bounds[0] = Math.min(bounds[0], centre - r);
+                bounds[1] = Math.max(bounds[1], centre + r);
+            }
+        }
+        return bounds;
+    }
+
+    @Override
+    public void close() {
+        where.remove();
+    }
+}
