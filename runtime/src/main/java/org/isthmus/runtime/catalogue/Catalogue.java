@@ -37,6 +37,14 @@ public final class Catalogue {
 
     private Catalogue() {}
 
+    /** What the language says of an observable, whether or not something computes it. */
+    public static ObservableEntry described(String name) {
+        return ObservableEntries.all().stream()
+                .filter(entry -> entry.name().equals(name))
+                .findFirst()
+                .orElseThrow(() -> new IllegalArgumentException("the language has no observable '" + name + "'"));
+    }
+
     private static void add(Entry entry) {
         Entry before = EXPRESSION_NAMES.putIfAbsent(entry.name(), entry);
         if (before != null) {

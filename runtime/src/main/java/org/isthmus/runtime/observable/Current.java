@@ -1,57 +1,59 @@
 package org.isthmus.runtime.observable;
 
-import java.util.List;
-import org.isthmus.runtime.device.Device;
+import java.util.function.DoubleUnaryOperator;
 import org.isthmus.runtime.device.ObservableCall;
 import org.isthmus.runtime.solve.EnergySolution;
 import org.isthmus.runtime.solve.Needs;
+import org.isthmus.runtime.units.PhysicalConstants;
 
-/** Electric current that enters the device at a lead, (g q/h) ∫ dE Σ_q [f_q T(q→p) − f_p T(p→q)]: positive at a lead on
- * positive bias (Büttiker, Phys. Rev. Lett. 57, 1761 (1986)). */
-final class Current implements Observable.Integrated {
-    @Override
-    public String name() {
-        return "current";
+/** I_p = (g q/h) ∫ Σ_q T(q→p) (f_q − f_p) dE: electric current that enters at lead p, positive on positive bias. */
+public final class Current extends Observable {
+    public Current() {
+        super("current", Needs.LEADS);
     }
 
     @Override
-    public List<ObservableCall> all(Device device) {
-        return Columns.leads(name(), device);
+    public double[] values(Bench bench, ObservableCall column, double energy) {
+        int lead = bench.index(column.leads().get(0));
+        double factor = bench.degeneracy() / PhysicalConstants.H;
+        if (!Double.isNaN(energy)) {
+            return new double[] {factor * spectral(bench, lead, energy)};
+        }
+        return new double[] {factor * integrated(bench, name(), lead, e -> 1)};
     }
 
-    @Override
-    public String column(ObservableCall call) {
-        return Columns.ofLeads(call);
-    }
-
-    @Override
-    public String unit(boolean resolved) {
-        return "A";
-    }
-
-    @Override
-    public Integrand integrand(PointContext context, ObservableCall call) {
-        int lead = context.lead(call, 0);
-        return new Integrand(
-                Needs.LEADS,
-                context.equilibrium() ? Window.EMPTY : context.thermal(),
-                1,
-                List.of(),
-                (solution, values, first) -> values[first] -= context.flow() * inflow(context, solution, lead),
-                (integrals, points) -> integrals);
-    }
-
-    /** Electrons that enter at a lead, per state and energy, times h. */
-    static double inflow(PointContext context, EnergySolution solution, int lead) {
-        double inflow = 0;
-        double own = Occupation.fermi(solution.energy(), context.leads().get(lead));
-        for (int other = 0; other < solution.leadCount(); other++) {
-            if (other != lead) {
-                double theirs =
-                        Occupation.fermi(solution.energy(), context.leads().get(other));
-                inflow += own * solution.transmission(lead, other) - theirs * solution.transmission(other, lead);
+    /** Σ_q T(q→p) (f_q − f_p): conventional current per energy, without (g q/h). */
+    static double spectral(Bench bench, int lead, double energy) {
+        EnergySolution solution = bench.at(energy);
+        double sum = 0;
+        for (int q = 0; q < bench.leads(); q++) {
+            if (q != lead) {
+                double difference = Fermi.difference(bench.lead(q), bench.lead(lead), energy);
+                sum += difference == 0 ? 0 : solution.transmission(q, lead) * difference;
             }
         }
-        return inflow;
+        return sum;
+    }
+
+    static double integrated(Bench bench, String what, int lead, DoubleUnaryOperator weight) {
+        if (inEquilibrium(bench)) {
+            return 0;
+        }
+        double[] window = bench.thermalWindow(Fermi.TAIL);
+        if (!(window[1] > window[0])) {
+            return 0;
+        }
+        return bench.integral(what, window[0], window[1], e ->
+                new double[] {weight.applyAsDouble(e) * spectral(bench, lead, e)})[0];
+    }
+
+    static boolean inEquilibrium(Bench bench) {
+        for (int p = 1; p < bench.leads(); p++) {
+            if (bench.lead(p).mu() != bench.lead(0).mu()
+                    || bench.lead(p).temperature() != bench.lead(0).temperature()) {
+                return false;
+            }
+        }
+        return true;
     }
 }

@@ -1,26 +1,22 @@
 package org.isthmus.runtime.observable;
 
 import java.util.ArrayList;
-import java.util.Collection;
+import java.util.Arrays;
 import java.util.List;
-import java.util.TreeSet;
 import java.util.function.DoubleFunction;
-import org.isthmus.runtime.solve.SolveFailure;
 
 /**
- * Integrals of several functions over one energy window, by adaptive Gauss–Kronrod rules of 7 and 15 points (Kronrod
- * 1965; nodes and weights as in QUADPACK, Piessens et al. 1983).
- *
- * <p>Between two break points the energy is replaced by E = a + (b − a)s²(3 − 2s), so that the square-root behaviour of
- * transmissions and densities of states at mode openings does no harm. Intervals are refined in rounds; which ones does
- * not depend on the number of threads.
+ * Integrals over energy by adaptive Gauss–Kronrod panels (15 and 7 points; nodes from Piessens et al., QUADPACK, Springer
+ * 1983). The first panels end at the break points; in each, E = a + (b − a)·s²(3 − 2s) takes the square-root behaviour at
+ * mode openings away. Panels are halved, worst generation first, and summed in order, so that the result does not depend
+ * on threads.
  */
 final class EnergyIntegral {
     private static final double[] NODES = {
         0.991455371120812639206854697526329, 0.949107912342758524526189684047851,
         0.864864423359769072789712788640926, 0.741531185599394439863864773280788,
-        0.586087235467691130294144845693013, 0.405845151377397166906606412076961,
-        0.207784955007898467600689403773245, 0
+        0.586087235467691130294144838258730, 0.405845151377397166906606412076961,
+        0.207784955007898467600689403773245, 0.000000000000000000000000000000000
     };
     private static final double[] KRONROD = {
         0.022935322010529224963732008058970, 0.063092092629978553290700663189204,
@@ -29,201 +25,166 @@ final class EnergyIntegral {
         0.204432940075298892414161999234649, 0.209482141084727828012999174891714
     };
     private static final double[] GAUSS = {
-        0.129484966168869693270611432679082, 0.279705391489276667901467771423780,
-        0.381830050505118944950369775488975, 0.417959183673469387755102040816327
+        0, 0.129484966168869693270611432679082,
+        0, 0.279705391489276667901467771423780,
+        0, 0.381830050505118944950369775488975,
+        0, 0.417959183673469387755102040816327
     };
+    private static final int DEEPEST = 26;
+    private static final int MOST_PANELS = 4000;
 
-    private static final int MOST_EVALUATIONS = 400_000;
-    private static final int PIECES = 6;
+    private final Bench bench;
 
-    private final Workers workers;
-    private final double accuracy;
-
-    EnergyIntegral(Workers workers, double accuracy) {
-        this.workers = workers;
-        this.accuracy = accuracy;
+    /** Integrates over energies that the bench solves. */
+    EnergyIntegral(Bench bench) {
+        this.bench = bench;
     }
 
-    private record Interval(int segment, double from, double to, double[] integral, double[] error, double[] size) {}
+    /** Integrates along any line; nothing is announced. */
+    static Result alongContour(List<Double> breaks, DoubleFunction<double[]> integrand, double accuracy) {
+        return new EnergyIntegral(null).integrate(breaks, integrand, accuracy);
+    }
 
-    private record Node(double energy, double weight) {}
+    /** A value with the error that was reached, relative to the largest component. */
+    record Result(double[] values, double relativeError) {}
+
+    private record Panel(double a, double b, double from, double to, int depth) {
+        double energy(double s) {
+            return a + (b - a) * s * s * (3 - 2 * s);
+        }
+
+        double weight(double s) {
+            return (b - a) * 6 * s * (1 - s);
+        }
+
+        double node(int k) {
+            double x = k < 7 ? -NODES[k] : k == 7 ? 0 : NODES[14 - k];
+            return 0.5 * (from + to) + 0.5 * (to - from) * x;
+        }
+    }
+
+    private record Done(Panel panel, double[] value, double[] error, double[] size) {}
 
     /**
      * Integrates.
      *
-     * @param breaks energies inside the window where the functions may be rough, in any order
-     * @param functions values of all functions at an energy; called from several threads
-     * @return an integral per function, each good to accuracy times the integral of its absolute value
-     * @throws SolveFailure where that is not reached
+     * @param breaks ascending, the window's ends among them
+     * @param integrand vector at an energy; every energy is announced to the bench before
      */
-    double[] over(double lower, double upper, Collection<Double> breaks, DoubleFunction<double[]> functions) {
-        List<double[]> segments = segments(lower, upper, breaks);
-        List<Interval> open = new ArrayList<>();
-        for (int s = 0; s < segments.size(); s++) {
-            open.add(new Interval(s, 0, 1, null, null, null));
-        }
-        List<Interval> settled = new ArrayList<>();
-        int evaluations = 0;
-        while (true) {
-            List<Interval> measured = measure(open, segments, functions);
-            evaluations += 15 * measured.size();
-            settled.addAll(measured);
-            double[] target = target(settled);
-            double[] error = sum(settled, Interval::error);
-            if (within(error, target)) {
-                return sum(settled, Interval::integral);
+    Result integrate(List<Double> breaks, DoubleFunction<double[]> integrand, double accuracy) {
+        List<Panel> open = new ArrayList<>();
+        for (int k = 0; k + 1 < breaks.size(); k++) {
+            if (breaks.get(k + 1) > breaks.get(k)) {
+                open.add(new Panel(breaks.get(k), breaks.get(k + 1), 0, 1, 0));
             }
-            if (evaluations > MOST_EVALUATIONS) {
-                throw new SolveFailure("An integral over energies from " + lower + " to " + upper
-                        + " eV did not settle after " + evaluations + " solves; allow a larger 'accuracy' than "
-                        + accuracy
-                        + ", or a temperature above the width of the sharpest resonance.");
+        }
+        List<Done> done = new ArrayList<>();
+        while (!open.isEmpty()) {
+            announce(open);
+            for (Panel panel : open) {
+                done.add(evaluate(panel, integrand));
             }
             open = new ArrayList<>();
-            List<Interval> kept = new ArrayList<>();
-            for (Interval interval : settled) {
-                if (rough(interval, target, settled.size())) {
-                    double middle = (interval.from + interval.to) / 2;
-                    open.add(new Interval(interval.segment, interval.from, middle, null, null, null));
-                    open.add(new Interval(interval.segment, middle, interval.to, null, null, null));
+            if (done.isEmpty() || done.get(0).value().length == 0 || done.size() > MOST_PANELS) {
+                break;
+            }
+            double[] total = total(done, Done::size);
+            double[] error = total(done, Done::error);
+            double largest = Arrays.stream(total).max().orElse(0);
+            List<Done> kept = new ArrayList<>();
+            for (Done one : done) {
+                boolean refine = false;
+                for (int c = 0; c < total.length; c++) {
+                    double allowed = accuracy * Math.max(total[c], 1e-6 * largest);
+                    refine |= error[c] > allowed && one.error()[c] > allowed * share(one.panel()) * 0.5;
+                }
+                if (refine && one.panel().depth() < DEEPEST) {
+                    Panel p = one.panel();
+                    double middle = 0.5 * (p.from() + p.to());
+                    open.add(new Panel(p.a(), p.b(), p.from(), middle, p.depth() + 1));
+                    open.add(new Panel(p.a(), p.b(), middle, p.to(), p.depth() + 1));
                 } else {
-                    kept.add(interval);
+                    kept.add(one);
                 }
             }
-            settled = kept;
-            if (open.isEmpty()) {
-                throw new SolveFailure("An integral over energies from " + lower + " to " + upper
-                        + " eV cannot be refined any further; allow a larger 'accuracy' than " + accuracy + ".");
+            if (!open.isEmpty()) {
+                done = kept;
             }
         }
+        done.sort((x, y) -> {
+            int order = Double.compare(x.panel().a(), y.panel().a());
+            return order != 0
+                    ? order
+                    : Double.compare(x.panel().from(), y.panel().from());
+        });
+        double[] value = total(done, Done::value);
+        double[] error = total(done, Done::error);
+        double[] size = total(done, Done::size);
+        double largest = Arrays.stream(size).max().orElse(0);
+        double worst = 0;
+        for (int c = 0; c < value.length; c++) {
+            worst = Math.max(worst, size[c] == 0 ? 0 : error[c] / Math.max(size[c], 1e-6 * largest));
+        }
+        return new Result(value, worst);
     }
 
-    private static List<double[]> segments(double lower, double upper, Collection<Double> breaks) {
-        TreeSet<Double> ends = new TreeSet<>();
-        double nearest = 1e-12 * (1 + Math.abs(lower) + Math.abs(upper));
-        ends.add(lower);
-        ends.add(upper);
-        for (int piece = 1; piece < PIECES; piece++) {
-            ends.add(lower + (upper - lower) * piece / PIECES);
+    /** A panel may err by its share of the first panel's length, so that all of them together stay within the accuracy. */
+    private static double share(Panel panel) {
+        return panel.to() - panel.from();
+    }
+
+    private void announce(List<Panel> panels) {
+        if (bench == null) {
+            return;
         }
-        for (double at : breaks) {
-            if (at > lower + nearest && at < upper - nearest) {
-                ends.add(at);
+        double[] energies = new double[15 * panels.size()];
+        for (int p = 0; p < panels.size(); p++) {
+            for (int k = 0; k < 15; k++) {
+                energies[15 * p + k] = panels.get(p).energy(panels.get(p).node(k));
             }
         }
-        List<double[]> segments = new ArrayList<>();
-        double from = lower;
-        for (double end : ends) {
-            if (end - from > nearest || end == upper && end > from) {
-                segments.add(new double[] {from, end});
-                from = end;
+        bench.announce(energies);
+    }
+
+    private static Done evaluate(Panel panel, DoubleFunction<double[]> integrand) {
+        double[] kronrod = null;
+        double[] gauss = null;
+        double[] size = null;
+        double half = 0.5 * (panel.to() - panel.from());
+        for (int k = 0; k < 15; k++) {
+            double s = panel.node(k);
+            double[] value = integrand.apply(panel.energy(s));
+            if (kronrod == null) {
+                kronrod = new double[value.length];
+                gauss = new double[value.length];
+                size = new double[value.length];
+            }
+            int pair = Math.min(k, 14 - k);
+            double wk = KRONROD[pair] * half * panel.weight(s);
+            double wg = GAUSS[pair] * half * panel.weight(s);
+            for (int c = 0; c < value.length; c++) {
+                kronrod[c] += wk * value[c];
+                gauss[c] += wg * value[c];
+                size[c] += wk * Math.abs(value[c]);
             }
         }
-        return segments;
-    }
-
-    private List<Interval> measure(
-            List<Interval> intervals, List<double[]> segments, DoubleFunction<double[]> functions) {
-        List<Double> energies = new ArrayList<>();
-        for (Interval interval : intervals) {
-            for (Node node : nodes(interval, segments.get(interval.segment))) {
-                energies.add(node.energy);
-            }
-        }
-        List<double[]> values = workers.map(energies, functions::apply);
-        List<Interval> measured = new ArrayList<>(intervals.size());
-        int at = 0;
-        for (Interval interval : intervals) {
-            List<Node> nodes = nodes(interval, segments.get(interval.segment));
-            measured.add(estimate(interval, nodes, values.subList(at, at + nodes.size())));
-            at += nodes.size();
-        }
-        return measured;
-    }
-
-    /** From the left; the weight holds dE/ds but not the rule's own factor. */
-    private static List<Node> nodes(Interval interval, double[] segment) {
-        List<Node> nodes = new ArrayList<>(15);
-        double middle = (interval.from + interval.to) / 2;
-        double half = (interval.to - interval.from) / 2;
-        for (int i = 0; i < 15; i++) {
-            double x = i < 8 ? -NODES[i] : NODES[14 - i];
-            double s = middle + half * x;
-            double length = segment[1] - segment[0];
-            nodes.add(new Node(segment[0] + length * s * s * (3 - 2 * s), half * length * 6 * s * (1 - s)));
-        }
-        return nodes;
-    }
-
-    private static Interval estimate(Interval interval, List<Node> nodes, List<double[]> values) {
-        int n = values.get(0).length;
-        double[] kronrod = new double[n];
-        double[] gauss = new double[n];
-        double[] size = new double[n];
-        for (int i = 0; i < 15; i++) {
-            int fold = i < 8 ? i : 14 - i;
-            double weight = nodes.get(i).weight;
-            double[] value = values.get(i);
-            for (int c = 0; c < n; c++) {
-                kronrod[c] += KRONROD[fold] * weight * value[c];
-                size[c] += KRONROD[fold] * weight * Math.abs(value[c]);
-                if (fold % 2 == 1) {
-                    gauss[c] += GAUSS[fold / 2] * weight * value[c];
-                }
-            }
-        }
-        double[] error = new double[n];
-        for (int c = 0; c < n; c++) {
-            // the higher rule is far better than the difference says; QUADPACK's scaling
-            double difference = Math.abs(kronrod[c] - gauss[c]);
-            double scaled = size[c] == 0 ? 0 : size[c] * Math.min(1, Math.pow(200 * difference / size[c], 1.5));
-            error[c] = Math.min(difference, scaled);
-        }
-        return new Interval(interval.segment, interval.from, interval.to, kronrod, error, size);
-    }
-
-    private double[] target(List<Interval> intervals) {
-        double[] target = sum(intervals, Interval::size);
-        for (int c = 0; c < target.length; c++) {
-            target[c] *= accuracy;
-        }
-        return target;
-    }
-
-    private static boolean within(double[] error, double[] target) {
+        double[] error = new double[kronrod.length];
         for (int c = 0; c < error.length; c++) {
-            if (error[c] > target[c]) {
-                return false;
-            }
+            double raw = Math.abs(kronrod[c] - gauss[c]);
+            // QUADPACK's scaling: the Kronrod value is far better than the difference of the two
+            double scaled = size[c] == 0 ? 0 : size[c] * Math.min(1, Math.pow(200 * raw / size[c], 1.5));
+            error[c] = Math.max(Math.min(raw, scaled), 50 * Math.ulp(size[c]));
         }
-        return true;
+        return new Done(panel, kronrod, error, size);
     }
 
-    /** An interval that has more than its share of the error allowed, and can still be halved. */
-    private static boolean rough(Interval interval, double[] target, int intervals) {
-        if (interval.to - interval.from < 1e-9) {
-            return false;
+    private static double[] total(List<Done> done, java.util.function.Function<Done, double[]> part) {
+        if (done.isEmpty()) {
+            return new double[0];
         }
-        for (int c = 0; c < target.length; c++) {
-            if (interval.error[c] > target[c] / intervals) {
-                return true;
-            }
-        }
-        return false;
-    }
-
-    private interface Part {
-        double[] of(Interval interval);
-    }
-
-    /** In the order of energies, so that the rounding is always the same. */
-    private static double[] sum(List<Interval> intervals, Part part) {
-        List<Interval> ordered = new ArrayList<>(intervals);
-        ordered.sort((a, b) ->
-                a.segment != b.segment ? Integer.compare(a.segment, b.segment) : Double.compare(a.from, b.from));
-        double[] sum = new double[part.of(ordered.get(0)).length];
-        for (Interval interval : ordered) {
-            double[] values = part.of(interval);
+        double[] sum = new double[part.apply(done.get(0)).length];
+        for (Done one : done) {
+            double[] values = part.apply(one);
             for (int c = 0; c < sum.length; c++) {
                 sum[c] += values[c];
             }

@@ -1,47 +1,30 @@
 package org.isthmus.runtime.observable;
 
-import java.util.List;
-import org.isthmus.runtime.device.Device;
 import org.isthmus.runtime.device.ObservableCall;
+import org.isthmus.runtime.solve.EnergySolution;
 import org.isthmus.runtime.solve.Needs;
+import org.isthmus.runtime.units.PhysicalConstants;
 
-/** Noise relative to that of independent electrons, |S_ab|/(2q|I_a|); not a number where no current flows. */
-final class Fano implements Observable.Integrated {
-    @Override
-    public String name() {
-        return "fano";
+/**
+ * On an energy axis Tr[tt†(1 − tt†)]/Tr[tt†]; otherwise |S_ab|/(2q|I_b|) (Büttiker, Phys. Rev. Lett. 65, 2901 (1990)). Not
+ * defined where nothing flows.
+ */
+public final class Fano extends Observable {
+    public Fano() {
+        super("fano", new Needs(false, true));
     }
 
     @Override
-    public List<ObservableCall> all(Device device) {
-        return Columns.pairs(name(), device, false);
-    }
-
-    @Override
-    public String column(ObservableCall call) {
-        return Columns.ofLeads(call);
-    }
-
-    @Override
-    public String unit(boolean resolved) {
-        return "";
-    }
-
-    @Override
-    public Integrand integrand(PointContext context, ObservableCall call) {
-        int a = context.lead(call, 0);
-        int b = context.lead(call, 1);
-        return new Integrand(
-                new Needs(false, true),
-                context.thermal(),
-                2,
-                List.of(),
-                (solution, values, first) -> {
-                    values[first] += Noise.density(context, solution, a, b);
-                    values[first + 1] += Current.inflow(context, solution, a);
-                },
-                (integrals, points) -> new double[] {
-                    integrals[1] == 0 ? Double.NaN : Math.abs(integrals[0]) / (2 * Math.abs(integrals[1]))
-                });
+    public double[] values(Bench bench, ObservableCall column, double energy) {
+        int from = bench.index(column.leads().get(0));
+        int to = bench.index(column.leads().get(1));
+        if (!Double.isNaN(energy)) {
+            EnergySolution solution = bench.at(energy);
+            double t = solution.transmission(from, to);
+            return new double[] {t > 0 ? 1 - solution.transmissionSquared(from, to) / t : Double.NaN};
+        }
+        double current = bench.degeneracy() / PhysicalConstants.H * Current.integrated(bench, name(), to, e -> 1);
+        double noise = Noise.spectralDensity(bench, name(), from, to);
+        return new double[] {current == 0 ? Double.NaN : Math.abs(noise) / (2 * Math.abs(current))};
     }
 }

@@ -1,43 +1,20 @@
 package org.isthmus.runtime.observable;
 
-import java.util.List;
-import org.isthmus.runtime.device.Device;
 import org.isthmus.runtime.device.ObservableCall;
 import org.isthmus.runtime.solve.Needs;
+import org.isthmus.runtime.units.PhysicalConstants;
 
-/** Heat that electrons carry into the body at a lead, ∫ dE (E − mu) × electron inflow. */
-final class HeatCurrent implements Observable.Integrated {
-    @Override
-    public String name() {
-        return "heatCurrent";
+/** (g/h) ∫ (E − µ_p) × electron inflow dE (Sivan & Imry, Phys. Rev. B 33, 551 (1986)); positive into the body. */
+public final class HeatCurrent extends Observable {
+    public HeatCurrent() {
+        super("heatCurrent", Needs.LEADS);
     }
 
     @Override
-    public List<ObservableCall> all(Device device) {
-        return Columns.leads(name(), device);
-    }
-
-    @Override
-    public String column(ObservableCall call) {
-        return Columns.ofLeads(call);
-    }
-
-    @Override
-    public String unit(boolean resolved) {
-        return "J/s";
-    }
-
-    @Override
-    public Integrand integrand(PointContext context, ObservableCall call) {
-        int lead = context.lead(call, 0);
-        double mu = context.leads().get(lead).mu();
-        return new Integrand(
-                Needs.LEADS,
-                context.equilibrium() ? Window.EMPTY : context.thermal(),
-                1,
-                List.of(),
-                (solution, values, first) -> values[first] +=
-                        context.flow() * (solution.energy() - mu) * Current.inflow(context, solution, lead),
-                (integrals, points) -> integrals);
+    public double[] values(Bench bench, ObservableCall column, double energy) {
+        int lead = bench.index(column.leads().get(0));
+        double mu = bench.lead(lead).mu();
+        double flow = Current.integrated(bench, name(), lead, e -> -(e - mu));
+        return new double[] {bench.degeneracy() / PhysicalConstants.H * flow};
     }
 }

@@ -1,55 +1,62 @@
 package org.isthmus.runtime.observable;
 
+import java.util.ArrayList;
 import java.util.List;
 import org.isthmus.runtime.device.Device;
+import org.isthmus.runtime.device.Lead;
 import org.isthmus.runtime.device.ObservableCall;
 import org.isthmus.runtime.solve.EnergySolution;
 import org.isthmus.runtime.solve.Needs;
+import org.isthmus.runtime.units.PhysicalConstants;
 
-/** One-sided spectral density of the current fluctuations at zero frequency, (g q²/h) Σ_cd ∫ dE Tr[A_cd(a) A_dc(b)]
- * [f_c(1 − f_d) + f_d(1 − f_c)] (Büttiker, Phys. Rev. B 46, 12485 (1992)); 4kTG in equilibrium. */
-final class Noise implements Observable.Integrated {
-    @Override
-    public String name() {
-        return "noise";
+/**
+ * One-sided, at zero frequency: S_ab = (g q²/h) Σ_cd ∫ Tr[A_cd(a) A_dc(b)] (f_c(1 − f_d) + f_d(1 − f_c)) dE (Büttiker, Phys.
+ * Rev. B 46, 12485 (1992)); S_aa = 4kTG in equilibrium.
+ */
+public final class Noise extends Observable {
+    public Noise() {
+        super("noise", new Needs(false, true));
     }
 
     @Override
-    public List<ObservableCall> all(Device device) {
-        return Columns.pairs(name(), device, true);
+    public List<ObservableCall> columns(ObservableCall call, Device device) {
+        if (!call.leads().isEmpty()) {
+            return List.of(call);
+        }
+        List<ObservableCall> calls = new ArrayList<>();
+        for (Lead a : device.leads()) {
+            for (Lead b : device.leads()) {
+                calls.add(new ObservableCall(name(), a.name(), b.name()));
+            }
+        }
+        return calls;
     }
 
     @Override
-    public String column(ObservableCall call) {
-        return Columns.ofLeads(call);
+    public double[] values(Bench bench, ObservableCall column, double energy) {
+        int a = bench.index(column.leads().get(0));
+        int b = bench.index(column.leads().get(1));
+        return new double[] {spectralDensity(bench, name(), a, b)};
     }
 
-    @Override
-    public String unit(boolean resolved) {
-        return "A^2/Hz";
+    static double spectralDensity(Bench bench, String what, int a, int b) {
+        double[] window = bench.thermalWindow(Fermi.TAIL);
+        if (!(window[1] > window[0])) {
+            return 0;
+        }
+        double integral = bench.integral(what, window[0], window[1], e -> new double[] {density(bench, a, b, e)})[0];
+        return bench.degeneracy() / PhysicalConstants.H * integral;
     }
 
-    @Override
-    public Integrand integrand(PointContext context, ObservableCall call) {
-        int a = context.lead(call, 0);
-        int b = context.lead(call, 1);
-        return new Integrand(
-                new Needs(false, true),
-                context.thermal(),
-                1,
-                List.of(),
-                (solution, values, first) -> values[first] += context.flow() * density(context, solution, a, b),
-                (integrals, points) -> integrals);
-    }
-
-    static double density(PointContext context, EnergySolution solution, int a, int b) {
+    private static double density(Bench bench, int a, int b, double energy) {
+        EnergySolution solution = bench.at(energy);
         double sum = 0;
-        for (int c = 0; c < solution.leadCount(); c++) {
-            double fc = Occupation.fermi(solution.energy(), context.leads().get(c));
-            for (int d = 0; d < solution.leadCount(); d++) {
-                double fd = Occupation.fermi(solution.energy(), context.leads().get(d));
-                double weight = fc * (1 - fd) + fd * (1 - fc);
-                sum += weight == 0 ? 0 : weight * solution.noiseTrace(a, b, c, d);
+        for (int c = 0; c < bench.leads(); c++) {
+            for (int d = 0; d < bench.leads(); d++) {
+                double fc = Fermi.occupation(bench.lead(c), energy);
+                double fd = Fermi.occupation(bench.lead(d), energy);
+                double thermal = fc * Fermi.hole(bench.lead(d), energy) + fd * Fermi.hole(bench.lead(c), energy);
+                sum += thermal == 0 ? 0 : thermal * solution.noiseTrace(a, b, c, d);
             }
         }
         return sum;

@@ -1,85 +1,125 @@
 package org.isthmus.runtime.observable;
 
+import java.util.ArrayList;
 import java.util.List;
+import org.isthmus.runtime.catalogue.Catalogue;
+import org.isthmus.runtime.catalogue.ObservableEntry;
 import org.isthmus.runtime.device.Device;
+import org.isthmus.runtime.device.LatticeLead;
+import org.isthmus.runtime.device.Lead;
 import org.isthmus.runtime.device.ObservableCall;
-import org.isthmus.runtime.solve.EnergySolution;
 import org.isthmus.runtime.solve.Needs;
+import org.isthmus.runtime.units.Dimension;
+import org.isthmus.runtime.units.Units;
 
-/** Something that can be recorded. A new one is a class, listed in {@link Observables}. */
-interface Observable {
-    /** As in the catalogue. */
-    String name();
+/** Something that can be recorded, and how it is computed. One class each, found as a service. */
+public abstract class Observable implements ObservableEntry {
+    private final ObservableEntry entry;
+    private final Needs needs;
 
-    /** Calls that a record without arguments stands for. */
-    List<ObservableCall> all(Device device);
+    /** Takes name, arguments, dimensions and documentation from the catalogue's list of all observables. */
+    protected Observable(String name, Needs needs) {
+        entry = Catalogue.described(name);
+        this.needs = needs;
+    }
 
-    /** What a column of values is called, without its unit. */
-    String column(ObservableCall call);
+    /** The observable with this name, where the solver has it. */
+    public static Observable named(String name) {
+        return (Observable) Catalogue.observable(name)
+                .filter(Observable.class::isInstance)
+                .orElseThrow(() -> new IllegalArgumentException("'" + name + "' is not solved yet"));
+    }
+
+    @Override
+    public final String name() {
+        return entry.name();
+    }
+
+    @Override
+    public final String documentation() {
+        return entry.documentation();
+    }
+
+    @Override
+    public final Arguments arguments() {
+        return entry.arguments();
+    }
+
+    @Override
+    public final Resolution resolution() {
+        return entry.resolution();
+    }
+
+    @Override
+    public final boolean perSite() {
+        return entry.perSite();
+    }
+
+    @Override
+    public final Dimension dimension(boolean resolved) {
+        return entry.dimension(resolved);
+    }
+
+    @Override
+    public final boolean available() {
+        return true;
+    }
+
+    /** What a solve must give for it. */
+    public final Needs needs() {
+        return needs;
+    }
+
+    /** True where it has a value per energy in a measurement with or without an energy axis. */
+    public final boolean resolved(boolean energyAxis) {
+        return resolution() == Resolution.ENERGY || resolution() == Resolution.EITHER && energyAxis;
+    }
+
+    /** The calls that a recorded call stands for: one per column. Without leads it means all of them, or all pairs. */
+    public List<ObservableCall> columns(ObservableCall call, Device device) {
+        if (!call.leads().isEmpty() || arguments() == Arguments.NONE) {
+            return List.of(call);
+        }
+        List<ObservableCall> calls = new ArrayList<>();
+        for (Lead a : device.leads()) {
+            if (arguments() == Arguments.LEAD_PAIR) {
+                for (Lead b : device.leads()) {
+                    if (a != b) {
+                        calls.add(new ObservableCall(name(), a.name(), b.name()));
+                    }
+                }
+            } else {
+                calls.add(new ObservableCall(name(), a.name()));
+            }
+        }
+        return calls;
+    }
+
+    /** Name and unit of a column. */
+    public String header(ObservableCall column, boolean energyAxis) {
+        String title = column.leads().isEmpty() ? name() : String.join(">", column.leads());
+        String unit = Units.fitting(dimension(resolved(energyAxis))).symbol();
+        return unit.isEmpty() ? title : title + " (" + unit + ")";
+    }
+
+    /** A value in internal units, in the unit of the column. */
+    public double told(double value, boolean energyAxis) {
+        return Units.fitting(dimension(resolved(energyAxis))).fromInternal(value);
+    }
 
     /**
-     * Unit of its values, as units are written in the language; empty for plain numbers.
+     * Computes one column.
      *
-     * @param resolved one value per energy
+     * @param energy where it has a value per energy; otherwise not a number
+     * @return one value, or one per site, in internal units; not a number where it is not defined
      */
-    String unit(boolean resolved);
+    public abstract double[] values(Bench bench, ObservableCall column, double energy);
 
-    /** True where it has a value per site. */
-    default boolean perSite() {
-        return false;
-    }
-
-    /** An observable with a value at each energy. */
-    interface Resolved extends Observable {
-        Needs needs();
-
-        /**
-         * Its value at an energy, in internal units; one per site where {@link #perSite}.
-         */
-        double[] at(PointContext context, ObservableCall call, EnergySolution solution);
-    }
-
-    /** An observable that is integrated over energy. */
-    interface Integrated extends Observable {
-        /** What has to be integrated at an operating point. */
-        Integrand integrand(PointContext context, ObservableCall call);
-    }
-
-    /**
-     * Functions of energy whose integrals give an observable.
-     *
-     * @param size number of functions
-     * @param points energies at which solutions are wanted beside the integral: what a Fermi function's derivative
-     *     becomes at zero temperature
-     */
-    record Integrand(Needs needs, Window window, int size, List<Double> points, Functions functions, Finish finish) {
-        public Integrand {
-            points = List.copyOf(points);
-        }
-    }
-
-    /** Values of the functions at an energy. */
-    interface Functions {
-        void at(EnergySolution solution, double[] values, int first);
-    }
-
-    /** From the integrals, and the solutions at the wanted points, to values in internal units. */
-    interface Finish {
-        double[] values(double[] integrals, List<EnergySolution> points);
-    }
-
-    /** Energies beyond which nothing contributes, eV; empty where {@code upper} is not above {@code lower}. */
-    record Window(double lower, double upper) {
-        static final Window EMPTY = new Window(0, 0);
-
-        boolean empty() {
-            return !(upper > lower);
-        }
-
-        Window and(Window other) {
-            return empty()
-                    ? other
-                    : other.empty() ? this : new Window(Math.min(lower, other.lower), Math.max(upper, other.upper));
-        }
+    /** Leads of a call that have bands, for observables that need them. */
+    static List<ObservableCall> latticeLeads(String name, Device device) {
+        return device.leads().stream()
+                .filter(LatticeLead.class::isInstance)
+                .map(lead -> new ObservableCall(name, lead.name()))
+                .toList();
     }
 }

@@ -1,35 +1,51 @@
 package org.isthmus.runtime.observable;
 
-import org.isthmus.runtime.solve.OperatingPoint.LeadState;
-import org.isthmus.runtime.units.PhysicalConstants;
+import org.isthmus.runtime.device.ObservableCall;
+import org.isthmus.runtime.solve.EnergySolution;
+import org.isthmus.runtime.solve.Needs;
 
-/** Fermi functions, the limit of zero temperature included. */
-final class Occupation {
-    /** exp(−38) is below the spacing of doubles next to 1: beyond this many kT a Fermi function is 0 or 1. */
-    static final double REACH = 38;
+/**
+ * Gn/A per site: at an energy, or ∫Gn/∫A over the thermal window, from the lowest µ − 10 kT to the highest µ + 10 kT. Not
+ * defined on a site that no lead reaches.
+ */
+public final class Occupation extends Observable {
+    private static final double WINDOW = 10;
 
-    private Occupation() {}
+    public Occupation() {
+        super("occupation", new Needs(true, false));
+    }
 
-    /** Occupied share of states at an energy; one half at mu, also at zero temperature. */
-    static double fermi(double energy, LeadState lead) {
-        double kt = PhysicalConstants.KB * lead.temperature();
-        double above = energy - lead.mu();
-        if (kt == 0) {
-            return above < 0 ? 1 : above > 0 ? 0 : 0.5;
+    @Override
+    public double[] values(Bench bench, ObservableCall column, double energy) {
+        int sites = bench.device().sites().count();
+        double[] both;
+        if (!Double.isNaN(energy)) {
+            both = filledAndAll(bench, energy);
+        } else {
+            double[] window = bench.thermalWindow(WINDOW);
+            both = window[1] > window[0]
+                    ? bench.integral(name(), window[0], window[1], e -> filledAndAll(bench, e))
+                    : filledAndAll(bench, window[0]);
         }
-        double x = above / kt;
-        return x > 0 ? Math.exp(-x) / (1 + Math.exp(-x)) : 1 / (1 + Math.exp(x));
+        double[] values = new double[sites];
+        for (int site = 0; site < sites; site++) {
+            values[site] = both[sites + site] > 0 ? both[site] / both[sites + site] : Double.NaN;
+        }
+        return values;
     }
 
-    /** −∂f/∂E, 1/eV; for temperatures above zero. */
-    static double broadened(double energy, LeadState lead) {
-        double kt = PhysicalConstants.KB * lead.temperature();
-        double x = Math.exp(-Math.abs(energy - lead.mu()) / kt);
-        return x / (kt * (1 + x) * (1 + x));
-    }
-
-    /** Half the width of the energies at which the lead is neither full nor empty, eV. */
-    static double reach(LeadState lead) {
-        return REACH * PhysicalConstants.KB * lead.temperature();
+    private static double[] filledAndAll(Bench bench, double energy) {
+        EnergySolution solution = bench.at(energy);
+        int sites = bench.device().sites().count();
+        double[] both = new double[2 * sites];
+        for (int p = 0; p < bench.leads(); p++) {
+            double f = Fermi.occupation(bench.lead(p), energy);
+            double[] fed = solution.siteSpectral(p);
+            for (int site = 0; site < sites; site++) {
+                both[site] += f * fed[site];
+                both[sites + site] += fed[site];
+            }
+        }
+        return both;
     }
 }

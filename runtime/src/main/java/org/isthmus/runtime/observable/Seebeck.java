@@ -1,51 +1,27 @@
 package org.isthmus.runtime.observable;
 
-import java.util.List;
-import org.isthmus.runtime.device.Device;
 import org.isthmus.runtime.device.ObservableCall;
 import org.isthmus.runtime.solve.Needs;
-import org.isthmus.runtime.solve.OperatingPoint.LeadState;
 
-/** Thermovoltage per temperature difference, S = −L1/(q T L0) with L_n = ∫ dE (E − mu)ⁿ T(a→b) (−∂f/∂E); zero at zero
- * temperature (Sivan and Imry, Phys. Rev. B 33, 551 (1986)). */
-final class Seebeck implements Observable.Integrated {
-    @Override
-    public String name() {
-        return "seebeck";
+/** S = −L1/(q T L0), L_n = ∫ T(E) (E − µ)ⁿ (−df/dE) dE (Sivan & Imry 1986); zero at T = 0. */
+public final class Seebeck extends Observable {
+    public Seebeck() {
+        super("seebeck", Needs.LEADS);
     }
 
     @Override
-    public List<ObservableCall> all(Device device) {
-        return Columns.pairs(name(), device, false);
-    }
-
-    @Override
-    public String column(ObservableCall call) {
-        return Columns.ofLeads(call);
-    }
-
-    @Override
-    public String unit(boolean resolved) {
-        return "V/K";
-    }
-
-    @Override
-    public Integrand integrand(PointContext context, ObservableCall call) {
-        int from = context.lead(call, 0);
-        int to = context.lead(call, 1);
-        LeadState lead = context.leads().get(from);
-        return new Integrand(
-                Needs.LEADS,
-                context.thermal(from),
-                2,
-                List.of(),
-                (solution, values, first) -> {
-                    double passed = Occupation.broadened(solution.energy(), lead) * solution.transmission(from, to);
-                    values[first] += passed;
-                    values[first + 1] += (solution.energy() - lead.mu()) * passed;
-                },
-                (integrals, points) ->
-                        new double[] {lead.temperature() == 0 ? 0 : -integrals[1] / (lead.temperature() * integrals[0])
-                        });
+    public double[] values(Bench bench, ObservableCall column, double energy) {
+        int from = bench.index(column.leads().get(0));
+        int to = bench.index(column.leads().get(1));
+        double mu = bench.lead(from).mu();
+        double temperature = bench.lead(from).temperature();
+        double[] moments = bench.linearResponse(name(), from, e -> {
+            double t = bench.at(e).transmission(from, to);
+            return new double[] {t, t * (e - mu)};
+        });
+        if (moments[0] == 0) {
+            return new double[] {Double.NaN};
+        }
+        return new double[] {temperature == 0 ? 0 : -moments[1] / (temperature * moments[0])};
     }
 }

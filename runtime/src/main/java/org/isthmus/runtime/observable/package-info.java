@@ -1,10 +1,9 @@
 /**
- * What is measured on a device: observables from Green's functions, at every point of a measurement's axes.
+ * What can be recorded, computed from solves at single energies.
  *
- * <p>Start at {@link org.isthmus.runtime.observable.MeasurementRunner}; {@link org.isthmus.runtime.observable.Observables}
- * lists what it can compute.
+ * <p>Start at {@link org.isthmus.runtime.observable.Observable} and {@link org.isthmus.runtime.observable.Bench}. A
+ * current is positive where it enters the device.
  *
- * <p>Invariant: equal input gives equal values, bit for bit, whatever the number of threads: points are shared out, sums
- * are formed in a fixed order.
+ * <p>Invariant: an observable sees a device only through {@code EnergySolution}s; sums run in a fixed order.
  */
 package org.isthmus.runtime.observable;

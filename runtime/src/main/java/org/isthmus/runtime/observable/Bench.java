@@ -1,0 +1,225 @@
+package org.isthmus.runtime.observable;
+
+import java.util.ArrayList;
+import java.util.Arrays;
+import java.util.List;
+import java.util.Map;
+import java.util.TreeSet;
+import java.util.concurrent.ConcurrentHashMap;
+import java.util.concurrent.atomic.AtomicLong;
+import java.util.function.DoubleFunction;
+import java.util.stream.IntStream;
+import org.isthmus.runtime.device.Device;
+import org.isthmus.runtime.solve.EnergySolution;
+import org.isthmus.runtime.solve.Needs;
+import org.isthmus.runtime.solve.OperatingPoint.LeadState;
+import org.isthmus.runtime.solve.Solver;
+
+/**
+ * A device at one operating point, ready to be observed. Every energy is solved once, whatever asks for it; what is
+ * announced together is solved by as many threads as the caller's pool has.
+ */
+public final class Bench {
+    private static final int FEWEST_PANELS = 6;
+
+    private final Solver solver;
+    private final Needs needs;
+    private final double accuracy;
+    private final boolean energyAxis;
+    private final Map<Double, EnergySolution> solved = new ConcurrentHashMap<>();
+    private final AtomicLong solves = new AtomicLong();
+    private final Map<String, Double> shortfalls = new ConcurrentHashMap<>();
+
+    /**
+     * Sets up.
+     *
+     * @param needs of all observables together
+     * @param accuracy relative accuracy of integrals
+     * @param energyAxis true where the measurement records values at energies
+     */
+    public Bench(Solver solver, Needs needs, double accuracy, boolean energyAxis) {
+        this.solver = solver;
+        this.needs = needs;
+        this.accuracy = accuracy;
+        this.energyAxis = energyAxis;
+    }
+
+    public Device device() {
+        return solver.operatingPoint().device();
+    }
+
+    public boolean energyAxis() {
+        return energyAxis;
+    }
+
+    int leads() {
+        return device().leads().size();
+    }
+
+    LeadState lead(int index) {
+        return solver.operatingPoint().leads().get(index);
+    }
+
+    int index(String lead) {
+        return device().leadIndex(lead).orElseThrow();
+    }
+
+    double degeneracy() {
+        return device().degeneracy();
+    }
+
+    /** The solution at an energy. */
+    public EnergySolution at(double energy) {
+        EnergySolution known = solved.get(energy);
+        if (known == null) {
+            known = solver.solve(energy, needs);
+            solves.incrementAndGet();
+            solved.putIfAbsent(energy, known);
+        }
+        return known;
+    }
+
+    /** Solves energies that will be asked for, side by side. */
+    public void announce(double[] energies) {
+        double[] missing = Arrays.stream(energies)
+                .distinct()
+                .filter(e -> !solved.containsKey(e))
+                .toArray();
+        IntStream.range(0, missing.length).parallel().forEach(k -> at(missing[k]));
+    }
+
+    /** Number of energies solved so far. */
+    public long solves() {
+        return solves.get();
+    }
+
+    /** Largest residual of any equation solved so far. */
+    public double equationResidual() {
+        return solved.values().stream()
+                .mapToDouble(EnergySolution::equationResidual)
+                .max()
+                .orElse(0);
+    }
+
+    /** Integrals that did not reach the accuracy asked for, with what they reached. */
+    public Map<String, Double> shortfalls() {
+        return new java.util.TreeMap<>(shortfalls);
+    }
+
+    Solver solver() {
+        return solver;
+    }
+
+    double accuracy() {
+        return accuracy;
+    }
+
+    void shortfall(String what, double reached) {
+        if (reached > 10 * accuracy) {
+            shortfalls.merge(what, reached, Math::max);
+        }
+    }
+
+    /**
+     * Integral over the energies from lowest to highest, with mode openings and electrochemical potentials as break points.
+     *
+     * @param what for the message where the accuracy is not reached
+     */
+    double[] integral(String what, double lowest, double highest, DoubleFunction<double[]> integrand) {
+        EnergyIntegral.Result result = new EnergyIntegral(this).integrate(breaks(lowest, highest), integrand, accuracy);
+        shortfall(what, result.relativeError());
+        return result.values();
+    }
+
+    private List<Double> breaks(double lowest, double highest) {
+        TreeSet<Double> breaks = new TreeSet<>();
+        breaks.add(lowest);
+        breaks.add(highest);
+        for (double opening : solver.modeOpenings()) {
+            addInside(breaks, opening, lowest, highest);
+        }
+        double[] bounds = solver.spectrumBounds();
+        addInside(breaks, bounds[0], lowest, highest);
+        for (int p = 0; p < leads(); p++) {
+            double kT = Fermi.kT(lead(p));
+            for (double width : new double[] {-16, -4, 0, 4, 16}) {
+                addInside(breaks, lead(p).mu() + width * kT, lowest, highest);
+            }
+        }
+        List<Double> merged = merged(breaks, 1e-9 * (1 + Math.abs(highest) + Math.abs(lowest)));
+        int pieces = Math.max(1, (FEWEST_PANELS + merged.size() - 2) / Math.max(1, merged.size() - 1));
+        List<Double> fine = new ArrayList<>();
+        for (int k = 0; k + 1 < merged.size(); k++) {
+            for (int i = 0; i < pieces; i++) {
+                fine.add(merged.get(k) + (merged.get(k + 1) - merged.get(k)) * i / pieces);
+            }
+        }
+        fine.add(merged.get(merged.size() - 1));
+        return fine;
+    }
+
+    private static void addInside(TreeSet<Double> breaks, double energy, double lowest, double highest) {
+        if (energy > lowest && energy < highest) {
+            breaks.add(energy);
+        }
+    }
+
+    private static List<Double> merged(TreeSet<Double> values, double nearest) {
+        List<Double> merged = new ArrayList<>();
+        for (double value : values) {
+            if (merged.isEmpty() || value - merged.get(merged.size() - 1) > nearest) {
+                merged.add(value);
+            }
+        }
+        double last = values.last();
+        merged.set(merged.size() - 1, last);
+        if (merged.size() == 1) {
+            merged.add(0, values.first());
+        }
+        return merged;
+    }
+
+    /** Lowest and highest energy at which the leads' Fermi functions differ from their ends, within the spectrum. */
+    double[] thermalWindow(double widthInKT) {
+        double lowest = Double.POSITIVE_INFINITY;
+        double highest = Double.NEGATIVE_INFINITY;
+        for (int p = 0; p < leads(); p++) {
+            double width = widthInKT * Fermi.kT(lead(p));
+            lowest = Math.min(lowest, lead(p).mu() - width);
+            highest = Math.max(highest, lead(p).mu() + width);
+        }
+        double[] bounds = solver.spectrumBounds();
+        boolean wide = device().leads().stream().anyMatch(l -> !(l instanceof org.isthmus.runtime.device.LatticeLead));
+        if (wide) {
+            return new double[] {lowest, highest};
+        }
+        return new double[] {Math.max(lowest, bounds[0]), Math.min(highest, bounds[1])};
+    }
+
+    /**
+     * ∫ weight(E)·(−df/dE) dE for a lead: at T = 0 the weight at its electrochemical potential.
+     */
+    double[] linearResponse(String what, int lead, DoubleFunction<double[]> weight) {
+        LeadState state = lead(lead);
+        if (state.temperature() == 0) {
+            return weight.apply(state.mu());
+        }
+        double width = Fermi.TAIL * Fermi.kT(state);
+        double[] bounds = solver.spectrumBounds();
+        boolean wide = device().leads().stream().anyMatch(l -> !(l instanceof org.isthmus.runtime.device.LatticeLead));
+        double lowest = wide ? state.mu() - width : Math.max(state.mu() - width, bounds[0]);
+        double highest = wide ? state.mu() + width : Math.min(state.mu() + width, bounds[1]);
+        if (!(highest > lowest)) {
+            double[] shape = weight.apply(state.mu());
+            return new double[shape.length];
+        }
+        return integral(what, lowest, highest, energy -> {
+            double[] values = weight.apply(energy).clone();
+            double slope = Fermi.slope(state, energy);
+            for (int c = 0; c < values.length; c++) {
+                values[c] *= slope;
+            }
+            return values;
+        });
+    }
+}
