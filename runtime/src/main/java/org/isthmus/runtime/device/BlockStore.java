@@ -53,6 +53,17 @@ final class BlockStore {
         return imaginary == null;
     }
 
+    int columns(int block) {
+        return columns == null ? uniformColumns : columns[block];
+    }
+
+    int rows(int block) {
+        int size = start == null
+                ? uniformSize
+                : (block + 1 < start.length ? start[block + 1] : real.length) - start[block];
+        return size / columns(block);
+    }
+
     static final class Builder {
         private int count;
         private int size;

@@ -44,6 +44,16 @@ public final class HoppingTable {
         return blocks.imaginary(bond, row, column);
     }
 
+    /** Rows of a block: orbitals of the site it comes from. */
+    public int rows(int bond) {
+        return blocks.rows(bond);
+    }
+
+    /** Columns of a block: orbitals of the site it goes to. */
+    public int columns(int bond) {
+        return blocks.columns(bond);
+    }
+
     /** True where every block is real. */
     public boolean real() {
         return blocks.real();

@@ -101,6 +101,28 @@ public final class Bench {
                 .orElse(0);
     }
 
+    /**
+     * Largest difference between what can flow at a lead, Tr[Γ_p A], and the transmissions that it is made of, over all
+     * energies solved, relative to the largest such trace: zero but for rounding where no electron is lost.
+     */
+    public double conservationResidual() {
+        double worst = 0;
+        for (EnergySolution solution : solved.values()) {
+            double largest = 0;
+            double violation = 0;
+            for (int p = 0; p < solution.leadCount(); p++) {
+                double sum = 0;
+                for (int q = 0; q < solution.leadCount(); q++) {
+                    sum += solution.transmission(q, p);
+                }
+                largest = Math.max(largest, Math.abs(solution.spectralTrace(p)));
+                violation = Math.max(violation, Math.abs(solution.spectralTrace(p) - sum));
+            }
+            worst = largest < 1e-14 ? worst : Math.max(worst, violation / largest);
+        }
+        return worst;
+    }
+
     /** Integrals that did not reach the accuracy asked for, with what they reached. */
     public Map<String, Double> shortfalls() {
         return new java.util.TreeMap<>(shortfalls);

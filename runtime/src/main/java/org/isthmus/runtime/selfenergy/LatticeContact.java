@@ -15,8 +15,8 @@ final class LatticeContact implements Contact {
     private final ComplexMatrix overlap;
     private final SurfaceMethod method;
     private final ComplexBackend backend;
-    private final List<Double> openings;
-    private final double[] bounds;
+    private final LeadBands bands;
+    private List<Double> openings;
 
     LatticeContact(LatticeLead lead, SiteTable body, ComplexBackend backend) {
         this.backend = backend;
@@ -34,9 +34,7 @@ final class LatticeContact implements Contact {
                 .map(SurfaceMethod.class::cast)
                 .orElse(null);
         method = separable != null ? separable : new BlochModes(blocks, touched, backend);
-        LeadBands bands = new LeadBands(blocks, backend);
-        openings = bands.extrema();
-        bounds = bands.bounds();
+        bands = new LeadBands(blocks, backend);
     }
 
     private static void collect(
@@ -140,14 +138,18 @@ final class LatticeContact implements Contact {
         return tau;
     }
 
+    /** Found when first asked for: transmissions at given energies do without. */
     @Override
-    public List<Double> modeOpenings() {
+    public synchronized List<Double> modeOpenings() {
+        if (openings == null) {
+            openings = bands.extrema();
+        }
         return openings;
     }
 
     @Override
     public double[] bandBounds() {
-        return bounds.clone();
+        return bands.bounds();
     }
 
     @Override
