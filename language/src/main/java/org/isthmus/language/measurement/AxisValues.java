@@ -24,7 +24,9 @@ final class AxisValues {
         if (value instanceof Value.ListValue list) {
             if (points.getCount() != null || points.getStep() != null) {
                 throw new EvaluationFailure(
-                        points, IssueCode.KIND_MISMATCH, "A list has its points already; leave out what stands behind it.");
+                        points,
+                        IssueCode.KIND_MISMATCH,
+                        "A list has its points already; leave out what stands behind it.");
             }
             List<Double> values = new ArrayList<>();
             for (Value element : list.elements()) {
@@ -46,7 +48,9 @@ final class AxisValues {
         }
         if (points.getTolerance() != null) {
             throw new EvaluationFailure(
-                    points, IssueCode.KIND_MISMATCH, "'adaptive to' is for the energy axis; give a number of points here.");
+                    points,
+                    IssueCode.KIND_MISMATCH,
+                    "'adaptive to' is for the energy axis; give a number of points here.");
         }
         if (lower != Math.rint(lower) || upper != Math.rint(upper)) {
             throw new EvaluationFailure(
@@ -59,7 +63,8 @@ final class AxisValues {
 
     private static double finite(double value, Points points) {
         if (!Double.isFinite(value)) {
-            throw new EvaluationFailure(points.getValues(), IssueCode.NOT_FINITE, "A value of this axis is " + value + ".");
+            throw new EvaluationFailure(
+                    points.getValues(), IssueCode.NOT_FINITE, "A value of this axis is " + value + ".");
         }
         return value;
     }

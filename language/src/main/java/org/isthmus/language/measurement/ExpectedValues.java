@@ -73,7 +73,9 @@ final class ExpectedValues {
             if (Catalogue.observable(entry.getName()).isPresent()) {
                 return new ExpectedValue.Observed(call(reference), positions(reference));
             }
-            if (reference.isCall() && reference.getArguments().size() == 1 && Catalogue.reduction(entry.getName()).isPresent()) {
+            if (reference.isCall()
+                    && reference.getArguments().size() == 1
+                    && Catalogue.reduction(entry.getName()).isPresent()) {
                 return new ExpectedValue.Reduced(
                         Catalogue.reduction(entry.getName()).get().reduction(),
                         of(reference.getArguments().get(0)));
@@ -153,11 +155,11 @@ final class ExpectedValues {
         Dimension dimension =
                 inference.typeOf(coordinate.getValue()) instanceof Type.Scalar scalar ? scalar.dimension() : null;
         List<String> fitting = new ArrayList<>();
-        boolean energyResolved = reference.getTarget() instanceof CatalogueEntry entry
-                && Catalogue.observable(entry.getName()).orElse(null) instanceof ObservableEntry observable
-                && (observable.resolution() == ObservableEntry.Resolution.ENERGY
-                        || observable.resolution() == ObservableEntry.Resolution.EITHER
-                                && MeasurementAxes.hasEnergyAxis(measurement));
+        ObservableEntry observable =
+                Catalogue.observable(reference.getTarget().getName()).orElseThrow();
+        boolean energyResolved = observable.resolution() == ObservableEntry.Resolution.ENERGY
+                || observable.resolution() == ObservableEntry.Resolution.EITHER
+                        && MeasurementAxes.hasEnergyAxis(measurement);
         if (Dimension.ENERGY.equals(dimension) && energyResolved) {
             fitting.add(AxisPosition.ENERGY);
         }
@@ -185,13 +187,16 @@ final class ExpectedValues {
 
     private String known(String name, AxisCoordinate coordinate) {
         boolean present = measurement.getStatements().stream()
-                .anyMatch(s -> s instanceof SweepAxis sweep && sweep.getParameter().getName().equals(name)
-                        || s instanceof BiasAxis bias && AxisPosition.bias(bias.getLead().getName()).equals(name));
+                .anyMatch(s -> s instanceof SweepAxis sweep
+                                && sweep.getParameter().getName().equals(name)
+                        || s instanceof BiasAxis bias
+                                && AxisPosition.bias(bias.getLead().getName()).equals(name));
         if (!present) {
             throw new EvaluationFailure(
                     coordinate,
                     IssueCode.MISSING_AXIS,
-                    "'" + coordinate.getAxis().getName() + "' is no axis of this measurement; sweep it or leave it out here.");
+                    "'" + coordinate.getAxis().getName()
+                            + "' is no axis of this measurement; sweep it or leave it out here.");
         }
         return name;
     }

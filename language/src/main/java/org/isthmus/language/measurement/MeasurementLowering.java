@@ -84,7 +84,8 @@ public final class MeasurementLowering {
         Evaluator first = new Evaluator(new Environment(settings, overridden, 0));
         for (MeasurementSetting setting : statements(MeasurementSetting.class)) {
             if (setting.getTarget() instanceof Parameter parameter && !given.containsKey(parameter.getName())) {
-                attempt(() -> settings.put(parameter, new Value.Real(first.real(setting.getPoints().getValues()))));
+                attempt(() -> settings.put(
+                        parameter, new Value.Real(first.real(setting.getPoints().getValues()))));
             }
         }
         Evaluator evaluator = new Evaluator(new Environment(settings, overridden, 0));
@@ -134,8 +135,8 @@ public final class MeasurementLowering {
         for (Recording recording : statements(Recording.class)) {
             for (Expression item : recording.getItems()) {
                 Reference reference = (Reference) item;
-                attempt(() -> records.add(new Recorded(
-                        expected.call(reference), expected.positions(reference), Places.of(reference))));
+                attempt(() -> records.add(
+                        new Recorded(expected.call(reference), expected.positions(reference), Places.of(reference))));
             }
         }
         List<Measurement.Expectation> expectations = new ArrayList<>();
@@ -200,7 +201,9 @@ public final class MeasurementLowering {
         double value = evaluator.real(points.getValues());
         if (name.equals("temperature") && value < 0) {
             throw new EvaluationFailure(
-                    points.getValues(), IssueCode.NEGATIVE_TEMPERATURE, "A temperature of " + value + " K is below zero.");
+                    points.getValues(),
+                    IssueCode.NEGATIVE_TEMPERATURE,
+                    "A temperature of " + value + " K is below zero.");
         }
         if (name.equals("accuracy") && !(value > 0 && value < 1)) {
             throw new EvaluationFailure(
