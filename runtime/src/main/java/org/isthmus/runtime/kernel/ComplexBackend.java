@@ -66,4 +66,24 @@ public interface ComplexBackend {
 
     /** Schur form A = Z·T·Z† of any square matrix. */
     Schur schur(ComplexMatrix a);
+
+    /** True where real matrices are worked on in real arithmetic; where false, every {@link Dense} must be complex. */
+    default boolean realArithmetic() {
+        return false;
+    }
+
+    /**
+     * Eliminates the first {@code count} unknowns of a square matrix, which may be used up; count³/3 + count²·others +
+     * count·others².
+     *
+     * @throws SingularMatrixException where a pivot is exactly zero
+     */
+    default Reduction eliminate(Dense a, int count) {
+        return new FactoredReduction(this, a.complex(), count);
+    }
+
+    /** C ← C + factor·op(A)·op(B), all of one kind; n³. C must be neither A nor B. */
+    default void multiplyAdd(double factor, Op opA, Dense a, Op opB, Dense b, Dense c) {
+        multiplyAdd(factor, opA, a.complex(), opB, b.complex(), c.complex());
+    }
 }

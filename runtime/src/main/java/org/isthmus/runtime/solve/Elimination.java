@@ -1,62 +1,83 @@
 package org.isthmus.runtime.solve;
 
 import java.util.ArrayList;
+import java.util.Arrays;
 import java.util.List;
 import org.isthmus.runtime.kernel.ComplexBackend;
 import org.isthmus.runtime.kernel.ComplexBackend.HermitianEigen;
 import org.isthmus.runtime.kernel.ComplexMatrix;
+import org.isthmus.runtime.kernel.Dense;
 import org.isthmus.runtime.kernel.Op;
+import org.isthmus.runtime.kernel.Reduction;
 import org.isthmus.runtime.kernel.SingularMatrixException;
 import org.isthmus.runtime.plan.SolvePlan;
+import org.isthmus.runtime.plan.SolveStep;
 import org.isthmus.runtime.plan.SolveStep.Eliminate;
 
 /**
  * The upward sweep at one energy: every step's front F is split into what is eliminated (e) and its border (b), and the
- * Schur complement F_bb − F_be F_ee⁻¹ F_eb goes to the parent.
+ * Schur complement F_bb − F_be F_ee⁻¹ F_eb goes to the parent. In real arithmetic where nothing is complex: leads come
+ * last.
  *
  * <p>A block F_ee without leads is Hermitian at a real energy and singular where the energy is one of its own levels. The
  * orbitals that carry such a level are then not eliminated here but handed to the parent (delayed pivots), so that no
  * imaginary part is needed to get past it.
  */
 final class Elimination {
-    /** Below this reciprocal condition number the levels of a block are looked at. */
-    private static final double WELL_CONDITIONED = 3e-5;
+    /** Largest element of F_ee⁻¹F_eb that is let pass: its square multiplies rounding errors. */
+    private static final double TOLERATED = 300;
 
-    /** A level nearer than this to the energy, relative to the front's largest element, is handed on: growth stays below 10⁴. */
-    private static final double NEAR_LEVEL = 1e-4;
+    /** A level whose coupling to the border exceeds its distance from the energy by this factor is handed on. */
+    private static final double NEAR_LEVEL = 100;
+
+    /** A level nearer to the energy than this part of the block's largest level sits on it, to rounding. */
+    private static final double ON_LEVEL = 1e-14;
 
     private final SolvePlan plan;
     private final Entries entries;
     private final ComplexBackend backend;
     private final double zr;
     private final double zi;
-    private final boolean keep;
+    private final Keep keep;
     private final int[] where;
-    private final ComplexMatrix[] complements;
+    private final boolean real;
+    private final Dense[] complements;
+    private final int[][] borders;
     private final Front[] fronts;
+    private double amplification;
+
+    /** What the downward sweep will want. */
+    enum Keep {
+        NOTHING,
+        /** F_ee⁻¹F_eb, which is enough where F is Hermitian: at a real energy. */
+        RIGHT,
+        /** F_ee⁻¹ and F_beF_ee⁻¹ as well. */
+        ALL
+    }
 
     /**
      * What a step leaves for the downward sweep.
      *
      * @param eliminated orbitals, delayed ones of the children included
      * @param border orbitals of the Schur complement, own delayed ones included
-     * @param inverse F_ee⁻¹
      * @param right F_ee⁻¹F_eb
-     * @param left F_beF_ee⁻¹
+     * @param left F_beF_ee⁻¹; null where not kept
+     * @param inverse F_ee⁻¹; null where not kept
      */
-    record Front(int[] eliminated, int[] border, ComplexMatrix inverse, ComplexMatrix right, ComplexMatrix left) {}
+    record Front(int[] eliminated, int[] border, Dense right, Dense left, Dense inverse) {}
 
     /**
      * What is left for the leads.
      *
      * @param orbitals labels of rows and columns: those that leads touch, then delayed ones
      * @param matrix E·S − H without leads, everything else eliminated
-     * @param fronts one per step but the last; null where the downward sweep was not asked for
+     * @param fronts one per step but the last; null where nothing was to be kept
+     * @param rounding bound on the relative error that the elimination has added, to first order
+     * @param real true where all fronts are real
      */
-    record Remainder(int[] orbitals, ComplexMatrix matrix, Front[] fronts) {}
+    record Remainder(int[] orbitals, ComplexMatrix matrix, Front[] fronts, double rounding, boolean real) {}
 
-    Elimination(
-            SolvePlan plan, Entries entries, ComplexBackend backend, double zr, double zi, boolean keep, int[] where) {
+    Elimination(SolvePlan plan, Entries entries, ComplexBackend backend, double zr, double zi, Keep keep, int[] where) {
         this.plan = plan;
         this.entries = entries;
         this.backend = backend;
@@ -64,47 +85,47 @@ final class Elimination {
         this.zi = zi;
         this.keep = keep;
         this.where = where;
-        complements = new ComplexMatrix[plan.steps().size()];
-        fronts = new Front[plan.steps().size() - 1];
+        real = zi == 0 && entries.real() && backend.realArithmetic();
+        complements = new Dense[plan.steps().size()];
+        borders = new int[plan.steps().size()][];
+        fronts = keep == Keep.NOTHING ? null : new Front[plan.steps().size() - 1];
     }
 
     Remainder run() {
-        int[][] borders = new int[plan.steps().size()][];
         int root = plan.steps().size() - 1;
         for (int k = 0; k < root; k++) {
             if (Thread.interrupted()) {
                 throw new java.util.concurrent.CancellationException("the solve was cancelled");
             }
-            Eliminate step = (Eliminate) plan.steps().get(k);
-            int[] eliminated = withDelayed(step.eliminated(), step, borders);
-            ComplexMatrix front = assemble(k, step.children(), eliminated, step.border(), borders);
-            borders[k] = eliminate(k, front, eliminated, step.border());
+            eliminate(k, (Eliminate) plan.steps().get(k));
         }
-        int[] orbitals = withDelayed(plan.root().orbitals(), plan.root(), borders);
-        ComplexMatrix matrix = assemble(root, plan.root().children(), orbitals, new int[0], borders);
-        return new Remainder(orbitals, matrix, keep ? fronts : null);
+        int[] orbitals = withDelayed(plan.root().orbitals(), plan.root());
+        ComplexMatrix matrix = assemble(root, orbitals, new int[0]).complex();
+        letGo(root);
+        return new Remainder(orbitals, matrix, fronts, amplification * amplification * Math.ulp(1.0), real);
     }
 
     /** A step's own orbitals and those that its children could not eliminate. */
-    private int[] withDelayed(int[] own, org.isthmus.runtime.plan.SolveStep step, int[][] borders) {
-        List<Integer> delayed = new ArrayList<>();
+    private int[] withDelayed(int[] own, SolveStep step) {
+        int count = own.length;
+        for (int child : step.children()) {
+            count += borders[child].length - ((Eliminate) plan.steps().get(child)).border().length;
+        }
+        if (count == own.length) {
+            return own;
+        }
+        int[] all = Arrays.copyOf(own, count);
+        int next = own.length;
         for (int child : step.children()) {
             int planned = ((Eliminate) plan.steps().get(child)).border().length;
             for (int i = planned; i < borders[child].length; i++) {
-                delayed.add(borders[child][i]);
+                all[next++] = borders[child][i];
             }
-        }
-        if (delayed.isEmpty()) {
-            return own;
-        }
-        int[] all = java.util.Arrays.copyOf(own, own.length + delayed.size());
-        for (int i = 0; i < delayed.size(); i++) {
-            all[own.length + i] = delayed.get(i);
         }
         return all;
     }
 
-    private ComplexMatrix assemble(int step, List<Integer> children, int[] eliminated, int[] border, int[][] borders) {
+    private Dense assemble(int step, int[] eliminated, int[] border) {
         for (int i = 0; i < eliminated.length; i++) {
             where[eliminated[i]] = i;
         }
@@ -112,7 +133,7 @@ final class Elimination {
             where[border[i]] = eliminated.length + i;
         }
         int n = eliminated.length + border.length;
-        ComplexMatrix front = ComplexMatrix.zeros(n, n);
+        Dense front = Dense.zeros(n, n, real);
         for (int at = entries.first(step); at < entries.end(step); at++) {
             int row = where[entries.row(at)];
             int column = where[entries.column(at)];
@@ -124,99 +145,110 @@ final class Elimination {
                         column, row, zr * sr + zi * si - entries.hReal(at), zi * sr - zr * si + entries.hImaginary(at));
             }
         }
-        for (int child : children) {
+        for (int child : plan.steps().get(step).children()) {
             int[] labels = borders[child];
             int[] places = new int[labels.length];
             for (int i = 0; i < labels.length; i++) {
                 places[i] = where[labels[i]];
             }
-            front.scatterAdd(complements[child], places, places);
-            complements[child] = null;
+            front.scatterAdd(complements[child], places);
         }
         return front;
     }
 
-    /** Eliminates and stores the Schur complement; its labels. */
-    private int[] eliminate(int step, ComplexMatrix front, int[] eliminated, int[] border) {
-        int ne = eliminated.length;
-        int[] e = sequence(0, ne);
-        int[] b = sequence(ne, front.rows());
-        ComplexMatrix block = front.select(e, e);
-        ComplexBackend.Factors factors = ne == 0 ? null : factored(block);
-        if (ne > 0 && (factors == null || zi == 0 && factors.reciprocalCondition() < WELL_CONDITIONED)) {
-            int[] delayed = levels(block, largest(front));
-            if (delayed.length > 0) {
-                boolean[] isDelayed = new boolean[ne];
-                for (int i : delayed) {
-                    isDelayed[i] = true;
-                }
-                e = java.util.Arrays.stream(e).filter(i -> !isDelayed[i]).toArray();
-                b = java.util.stream.IntStream.concat(java.util.Arrays.stream(b), java.util.Arrays.stream(delayed))
-                        .toArray();
-                factors = e.length == 0 ? null : factored(front.select(e, e));
-            }
+    private void letGo(int step) {
+        for (int child : plan.steps().get(step).children()) {
+            complements[child] = null;
         }
-        int[] labels = new int[b.length];
-        for (int i = 0; i < b.length; i++) {
-            labels[i] = b[i] < ne ? eliminated[b[i]] : border[b[i] - ne];
-        }
-        ComplexMatrix complement = front.select(b, b);
-        if (e.length > 0) {
-            if (factors == null) {
-                throw new SolveFailure("The inner equations are singular at " + zr + " eV.");
-            }
-            ComplexMatrix right = factors.solve(front.select(e, b));
-            backend.multiplyAdd(-1, Op.NONE, front.select(b, e), Op.NONE, right, complement);
-            if (keep) {
-                ComplexMatrix inverse = factors.solve(ComplexMatrix.identity(e.length));
-                int[] gone = new int[e.length];
-                for (int i = 0; i < e.length; i++) {
-                    gone[i] = eliminated[e[i]];
-                }
-                fronts[step] = new Front(gone, labels, inverse, right, backend.multiply(front.select(b, e), inverse));
-            }
-        } else if (keep) {
-            ComplexMatrix none = ComplexMatrix.zeros(0, 0);
-            fronts[step] = new Front(
-                    new int[0], labels, none, ComplexMatrix.zeros(0, b.length), ComplexMatrix.zeros(b.length, 0));
-        }
-        complements[step] = complement;
-        return labels;
     }
 
-    /** The factors; null where the block is exactly singular. */
-    private ComplexBackend.Factors factored(ComplexMatrix block) {
+    private void eliminate(int k, Eliminate step) {
+        int[] eliminated = withDelayed(step.eliminated(), step);
+        int[] border = step.border();
+        Reduction reduction = reduced(assemble(k, eliminated, border), eliminated.length);
+        while (reduction == null || !(reduction.amplification() <= TOLERATED)) {
+            boolean[] delayed = levels(assemble(k, eliminated, border), eliminated.length);
+            int handed = 0;
+            for (boolean flag : delayed) {
+                handed += flag ? 1 : 0;
+            }
+            int[] left = new int[eliminated.length - handed];
+            int[] more = Arrays.copyOf(border, border.length + handed);
+            int l = 0;
+            int m = border.length;
+            for (int i = 0; i < delayed.length; i++) {
+                if (delayed[i]) {
+                    more[m++] = eliminated[i];
+                } else {
+                    left[l++] = eliminated[i];
+                }
+            }
+            eliminated = left;
+            border = more;
+            reduction = reduced(assemble(k, eliminated, border), eliminated.length);
+        }
+        letGo(k);
+        amplification = Math.max(amplification, reduction.amplification());
+        complements[k] = reduction.complement();
+        borders[k] = border;
+        if (keep != Keep.NOTHING) {
+            boolean all = keep == Keep.ALL;
+            fronts[k] = new Front(
+                    eliminated,
+                    border,
+                    reduction.right(),
+                    all ? reduction.left() : null,
+                    all ? reduction.inverse() : null);
+        }
+    }
+
+    /** The elimination; null where the block is exactly singular. */
+    private Reduction reduced(Dense front, int count) {
         try {
-            return backend.factor(block);
+            return backend.eliminate(front, count);
         } catch (SingularMatrixException ex) {
             return null;
         }
     }
 
-    /** Positions of the orbitals that carry a level of the block at this very energy. */
-    private int[] levels(ComplexMatrix block, double scale) {
-        HermitianEigen eigen = backend.hermitianEigen(block);
-        int n = block.rows();
-        if (scale == 0) {
-            return sequence(0, n);
+    /**
+     * Marks the orbitals that carry a level of the block at this very energy. It is at least one, so that what calls this
+     * comes to an end.
+     */
+    private boolean[] levels(Dense front, int count) {
+        int n = front.rows();
+        HermitianEigen eigen =
+                backend.hermitianEigen(front.block(0, count, 0, count).complex());
+        ComplexMatrix coupling = backend.multiply(
+                Op.ADJOINT,
+                eigen.vectors(),
+                Op.NONE,
+                front.block(0, count, count, n).complex());
+        double[] distances = Arrays.stream(eigen.values()).map(Math::abs).toArray();
+        double largest = Arrays.stream(distances).max().orElse(0);
+        double[] nearness = new double[count];
+        int nearest = 0;
+        for (int k = 0; k < count; k++) {
+            double size = 0;
+            for (int j = 0; j < coupling.columns(); j++) {
+                size = Math.max(size, Math.hypot(coupling.real(k, j), coupling.imaginary(k, j)));
+            }
+            nearness[k] = distances[k] <= ON_LEVEL * largest ? Double.POSITIVE_INFINITY : size / distances[k];
+            nearest = nearness[k] > nearness[nearest] ? k : nearest;
         }
         List<double[]> near = new ArrayList<>();
-        for (int k = 0; k < n; k++) {
-            if (Math.abs(eigen.values()[k]) < NEAR_LEVEL * scale) {
-                double[] vector = new double[2 * n];
-                System.arraycopy(eigen.vectors().data(), 2 * n * k, vector, 0, 2 * n);
+        for (int k = 0; k < count; k++) {
+            if (k == nearest || nearness[k] > NEAR_LEVEL) {
+                double[] vector = new double[2 * count];
+                System.arraycopy(eigen.vectors().data(), 2 * count * k, vector, 0, 2 * count);
                 near.add(vector);
             }
         }
-        return pivots(near, n);
-    }
-
-    private static double largest(ComplexMatrix m) {
-        double largest = 0;
-        for (double part : m.data()) {
-            largest = Math.max(largest, Math.abs(part));
+        boolean[] delayed = new boolean[count];
+        for (int orbital : pivots(near, count)) {
+            delayed[orbital] = true;
         }
-        return largest;
+        return delayed;
     }
 
     /** One orbital per level: the largest component of what is left, one level after the other (pivoted elimination). */
@@ -251,11 +283,6 @@ final class Elimination {
                 }
             }
         }
-        java.util.Arrays.sort(chosen);
         return chosen;
-    }
-
-    private static int[] sequence(int from, int to) {
-        return java.util.stream.IntStream.range(from, to).toArray();
     }
 }

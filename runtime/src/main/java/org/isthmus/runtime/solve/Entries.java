@@ -20,6 +20,7 @@ final class Entries {
     private final double[] hImaginary;
     private final double[] sReal;
     private final double[] sImaginary;
+    private final boolean real;
 
     /** Counts first, then fills: what is offered twice in the same order. */
     private interface Sink {
@@ -51,6 +52,9 @@ final class Entries {
         boolean overlaps = device.overlaps().count() > 0;
         sReal = overlaps ? new double[count] : null;
         sImaginary = overlaps ? new double[count] : null;
+        real = device.sites().real()
+                && device.hoppings().real()
+                && device.overlaps().real();
         int[] next = Arrays.copyOf(start, steps);
         offer(point, (r, c, hr, hi, sr, si) -> {
             int at = next[Math.min(stepOf[r], stepOf[c])]++;
@@ -120,8 +124,9 @@ final class Entries {
         return columns[at];
     }
 
-    boolean orthogonal() {
-        return sReal == null;
+    /** True where no element is complex. */
+    boolean real() {
+        return real;
     }
 
     double overlapReal(int at) {

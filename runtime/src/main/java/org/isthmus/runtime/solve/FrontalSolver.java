@@ -3,15 +3,18 @@ package org.isthmus.runtime.solve;
 import java.util.ArrayList;
 import java.util.Arrays;
 import java.util.List;
+import java.util.stream.IntStream;
 import org.isthmus.runtime.device.Device;
 import org.isthmus.runtime.device.HoppingTable;
 import org.isthmus.runtime.device.SiteTable;
 import org.isthmus.runtime.kernel.ComplexBackend;
 import org.isthmus.runtime.kernel.ComplexMatrix;
+import org.isthmus.runtime.kernel.Op;
 import org.isthmus.runtime.kernel.SingularMatrixException;
 import org.isthmus.runtime.plan.SolvePlan;
 import org.isthmus.runtime.selfenergy.Contact;
 import org.isthmus.runtime.selfenergy.OutsideTableException;
+import org.isthmus.runtime.solve.Elimination.Keep;
 import org.isthmus.runtime.solve.Elimination.Remainder;
 
 /** Executes a plan: everything that no lead touches is eliminated, then the leads are coupled to what is left. */
@@ -50,7 +53,7 @@ final class FrontalSolver implements Solver {
 
     @Override
     public EnergySolution solve(double energy, Needs needs) {
-        Coupled coupled = couple(energy, 0, needs.sites());
+        Coupled coupled = couple(energy, 0, needs.sites() ? Keep.RIGHT : Keep.NOTHING);
         int n = contacts.size();
         ComplexMatrix[] broadening = new ComplexMatrix[n];
         for (int p = 0; p < n; p++) {
@@ -60,13 +63,14 @@ final class FrontalSolver implements Solver {
         double[][] byLead = null;
         double[] total = null;
         if (needs.sites()) {
-            SiteSweep sweep = sweep();
-            byLead = sweep.spectral(coupled.remainder, coupled.green, coupled.places, broadening);
-            double[] diagonal = sweep.diagonal(coupled.remainder, coupled.green);
-            total = new double[diagonal.length / 2];
-            for (int site = 0; site < total.length; site++) {
-                total[site] = -2 * diagonal[2 * site + 1];
+            List<ComplexMatrix> values = new ArrayList<>();
+            for (int p = 0; p < n; p++) {
+                values.add(fed(coupled.green, coupled.places[p], broadening[p]));
             }
+            values.add(LeadTraces.broadening(coupled.green));
+            double[][] shares = sweep().shares(coupled.remainder, values);
+            byLead = Arrays.copyOf(shares, n);
+            total = shares[n];
         }
         int[] modes = new int[n];
         for (int p = 0; p < n; p++) {
@@ -88,8 +92,15 @@ final class FrontalSolver implements Solver {
         if (!(imaginary > 0)) {
             throw new IllegalArgumentException("the contour lies above the real axis, not at " + imaginary + " eV");
         }
-        Coupled coupled = couple(real, imaginary, true);
+        Coupled coupled = couple(real, imaginary, Keep.ALL);
         return sweep().diagonal(coupled.remainder, coupled.green);
+    }
+
+    /** G Γ G† for a Γ on some rows. */
+    private ComplexMatrix fed(ComplexMatrix green, int[] places, ComplexMatrix broadening) {
+        int[] all = IntStream.range(0, green.rows()).toArray();
+        ComplexMatrix columns = green.select(all, places);
+        return backend.multiply(Op.NONE, backend.multiply(columns, broadening), Op.ADJOINT, columns);
     }
 
     private SiteSweep sweep() {
@@ -99,7 +110,7 @@ final class FrontalSolver implements Solver {
     private record Coupled(
             Remainder remainder, ComplexMatrix green, Contact.SelfEnergy[] sigmas, int[][] places, double residual) {}
 
-    private Coupled couple(double real, double imaginary, boolean keep) {
+    private Coupled couple(double real, double imaginary, Keep keep) {
         Remainder remainder = new Elimination(plan, entries, backend, real, imaginary, keep, where.get()).run();
         ComplexMatrix matrix = remainder.matrix().copy();
         int[] index = where.get();
@@ -108,7 +119,7 @@ final class FrontalSolver implements Solver {
         }
         Contact.SelfEnergy[] sigmas = new Contact.SelfEnergy[contacts.size()];
         int[][] places = new int[contacts.size()][];
-        double residual = 0;
+        double residual = remainder.rounding();
         for (int p = 0; p < sigmas.length; p++) {
             sigmas[p] = selfEnergy(p, real, imaginary);
             places[p] =
@@ -151,7 +162,7 @@ final class FrontalSolver implements Solver {
         } catch (SingularMatrixException e) {
             int contactOrbitals = plan.root().orbitals().length;
             int n = matrix.rows();
-            int[] coupled = java.util.stream.IntStream.range(0, n)
+            int[] coupled = IntStream.range(0, n)
                     .filter(i -> i < contactOrbitals || rowSize(matrix, i) > UNCOUPLED)
                     .toArray();
             if (coupled.length == n) {

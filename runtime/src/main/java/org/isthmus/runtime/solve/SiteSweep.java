@@ -4,15 +4,16 @@ import java.util.List;
 import org.isthmus.runtime.device.SiteTable;
 import org.isthmus.runtime.kernel.ComplexBackend;
 import org.isthmus.runtime.kernel.ComplexMatrix;
+import org.isthmus.runtime.kernel.Dense;
 import org.isthmus.runtime.kernel.Op;
 import org.isthmus.runtime.plan.SolvePlan;
 import org.isthmus.runtime.solve.Elimination.Front;
 import org.isthmus.runtime.solve.Elimination.Remainder;
 
 /**
- * The downward sweep: with G on a step's border known, G_ee = F_ee⁻¹ + X G_bb Y, G_eb = −X G_bb, G_be = −G_bb Y for X =
- * F_ee⁻¹F_eb and Y = F_beF_ee⁻¹ (selected inversion, Takahashi, Fagan & Chen 1973); the columns of the contacts follow
- * alike, G_ec = −X G_bc. A step's values are let go as soon as its children have them.
+ * The downward sweep. With G on a step's border known, G_ee = F_ee⁻¹ + X G_bb Y, G_eb = −X G_bb, G_be = −G_bb Y for X =
+ * F_ee⁻¹F_eb and Y = F_beF_ee⁻¹ (selected inversion, Takahashi, Fagan & Chen 1973). Anything of the form G M G† with M on
+ * the contacts goes down alike, without the first term. A step's values are let go as soon as its children have them.
  */
 final class SiteSweep {
     private final SolvePlan plan;
@@ -45,12 +46,14 @@ final class SiteSweep {
         Block[] known = new Block[root + 1];
         known[root] = new Block(remainder.orbitals(), rootGreen);
         takeDiagonal(root, known[root], values);
-        int[] waiting = new int[root + 1];
         for (int k = root; k >= 0; k--) {
             List<Integer> children = plan.steps().get(k).children();
             for (int child : children) {
                 known[child] = inside(remainder.fronts()[child], known[k]);
                 takeDiagonal(child, known[child], values);
+                if (plan.steps().get(child).children().isEmpty()) {
+                    known[child] = null;
+                }
             }
             known[k] = null;
         }
@@ -62,19 +65,18 @@ final class SiteSweep {
         ComplexMatrix border = parent.green().select(places, places);
         int ne = front.eliminated().length;
         int nb = front.border().length;
-        ComplexMatrix right = backend.multiply(front.right(), border);
-        ComplexMatrix inner = front.inverse().copy();
-        backend.multiplyAdd(1, Op.NONE, right, Op.NONE, front.left(), inner);
-        ComplexMatrix left = backend.multiply(border, front.left());
-        ComplexMatrix green = ComplexMatrix.zeros(ne + nb, ne + nb);
-        int[] e = java.util.stream.IntStream.range(0, ne).toArray();
-        int[] b = java.util.stream.IntStream.range(ne, ne + nb).toArray();
+        ComplexMatrix right = backend.multiply(front.right().complex(), border);
+        ComplexMatrix inner = front.inverse().complex().copy();
+        backend.multiplyAdd(1, Op.NONE, right, Op.NONE, front.left().complex(), inner);
+        ComplexMatrix left = backend.multiply(border, front.left().complex());
         right.scale(-1, 0);
         left.scale(-1, 0);
-        green.scatterAdd(inner, e, e);
-        green.scatterAdd(right, e, b);
-        green.scatterAdd(left, b, e);
-        green.scatterAdd(border, b, b);
+        Dense whole = Dense.zeros(ne + nb, ne + nb, false);
+        whole.put(Dense.of(inner), 0, 0);
+        whole.put(Dense.of(right), 0, ne);
+        whole.put(Dense.of(left), ne, 0);
+        whole.put(Dense.of(border), ne, ne);
+        ComplexMatrix green = whole.complex();
         int[] labels = java.util.Arrays.copyOf(front.eliminated(), ne + nb);
         System.arraycopy(front.border(), 0, labels, ne, nb);
         return new Block(labels, green);
@@ -122,63 +124,69 @@ final class SiteSweep {
     }
 
     /**
-     * Site's share of Tr[G Γ_p G† S] for every lead.
+     * Site's share of Tr[A S], the diagonal of ½(AS + SA), for matrices A = G M G† with M on the contacts, or A = i(G − G†),
+     * at a real energy: inwards of a border both go as A_ee = X A_bb X†, A_eb = −X A_bb. Where F and S are real, so is X,
+     * and the real part of A is enough.
      *
-     * @param places rows and columns of each lead's Γ in the remainder's labels
-     * @param broadening Γ of each lead
-     * @return per lead, per site
+     * @param rootValues each A on the remainder's labels; Hermitian
+     * @return per matrix, per site
      */
-    double[][] spectral(Remainder remainder, ComplexMatrix rootGreen, int[][] places, ComplexMatrix[] broadening) {
+    double[][] shares(Remainder remainder, List<ComplexMatrix> rootValues) {
         int root = plan.steps().size() - 1;
-        int leads = places.length;
-        double[][] values = new double[leads][sites.count()];
-        for (int p = 0; p < leads; p++) {
-            ComplexMatrix[] columns = new ComplexMatrix[root + 1];
-            int[][] labels = new int[root + 1][];
-            labels[root] = remainder.orbitals();
-            columns[root] = rootGreen.select(
-                    java.util.stream.IntStream.range(0, rootGreen.rows()).toArray(), places[p]);
-            take(root, labels[root], columns[root], broadening[p], values[p]);
-            for (int k = root; k >= 0; k--) {
-                for (int child : plan.steps().get(k).children()) {
-                    Front front = remainder.fronts()[child];
-                    int[] rows = places(front.border(), labels[k]);
-                    ComplexMatrix border = columns[k].select(
-                            rows,
-                            java.util.stream.IntStream.range(0, columns[k].columns())
-                                    .toArray());
-                    ComplexMatrix inner = backend.multiply(front.right(), border);
-                    inner.scale(-1, 0);
-                    columns[child] = stacked(inner, border);
-                    labels[child] = java.util.Arrays.copyOf(
-                            front.eliminated(), front.eliminated().length + front.border().length);
-                    System.arraycopy(
-                            front.border(), 0, labels[child], front.eliminated().length, front.border().length);
-                    take(child, labels[child], columns[child], broadening[p], values[p]);
-                }
-                columns[k] = null;
-                labels[k] = null;
-            }
+        int kinds = rootValues.size();
+        double[][] shares = new double[kinds][sites.count()];
+        Spread[] known = new Spread[root + 1];
+        Dense[] first = new Dense[kinds];
+        for (int kind = 0; kind < kinds; kind++) {
+            first[kind] = remainder.real() ? Dense.realPart(rootValues.get(kind)) : Dense.of(rootValues.get(kind));
         }
-        return values;
+        known[root] = new Spread(remainder.orbitals(), first);
+        take(root, known[root], shares);
+        for (int k = root; k >= 0; k--) {
+            if (Thread.interrupted()) {
+                throw new java.util.concurrent.CancellationException("the solve was cancelled");
+            }
+            for (int child : plan.steps().get(k).children()) {
+                known[child] = inside(remainder.fronts()[child], known[k]);
+                take(child, known[child], shares);
+                if (plan.steps().get(child).children().isEmpty()) {
+                    known[child] = null;
+                }
+            }
+            known[k] = null;
+        }
+        return shares;
     }
 
-    private static ComplexMatrix stacked(ComplexMatrix above, ComplexMatrix below) {
-        ComplexMatrix whole = ComplexMatrix.zeros(above.rows() + below.rows(), above.columns());
-        int[] columns = java.util.stream.IntStream.range(0, above.columns()).toArray();
-        whole.scatterAdd(
-                above, java.util.stream.IntStream.range(0, above.rows()).toArray(), columns);
-        whole.scatterAdd(
-                below,
-                java.util.stream.IntStream.range(above.rows(), whole.rows()).toArray(),
-                columns);
-        return whole;
+    /** Labels with some matrices between all of them. */
+    private record Spread(int[] labels, Dense[] values) {}
+
+    private Spread inside(Front front, Spread parent) {
+        int[] places = places(front.border(), parent.labels());
+        Dense right = front.right();
+        int ne = front.eliminated().length;
+        int nb = front.border().length;
+        Dense[] values = new Dense[parent.values().length];
+        for (int kind = 0; kind < values.length; kind++) {
+            Dense border = parent.values()[kind].select(places, places);
+            Dense across = Dense.zeros(ne, nb, right.real());
+            backend.multiplyAdd(-1, Op.NONE, right, Op.NONE, border, across);
+            Dense inner = Dense.zeros(ne, ne, right.real());
+            backend.multiplyAdd(-1, Op.NONE, across, Op.ADJOINT, right, inner);
+            values[kind] = Dense.zeros(ne + nb, ne + nb, right.real());
+            values[kind].put(inner, 0, 0);
+            values[kind].put(across, 0, ne);
+            values[kind].putAdjoint(across, ne, 0);
+            values[kind].put(border, ne, ne);
+        }
+        int[] labels = java.util.Arrays.copyOf(front.eliminated(), ne + nb);
+        System.arraycopy(front.border(), 0, labels, ne, nb);
+        return new Spread(labels, values);
     }
 
-    private void take(int step, int[] labels, ComplexMatrix columns, ComplexMatrix broadening, double[] values) {
-        places(new int[0], labels);
-        ComplexMatrix fed = backend.multiply(columns, broadening);
-        int width = columns.columns();
+    /** Adds Re A_ij S_ji of the elements of S that the step took in; a pair counts for both its sites. */
+    private void take(int step, Spread spread, double[][] shares) {
+        places(new int[0], spread.labels());
         for (int at = entries.first(step); at < entries.end(step); at++) {
             double sr = entries.overlapReal(at);
             double si = entries.overlapImaginary(at);
@@ -187,21 +195,13 @@ final class SiteSweep {
             }
             int i = where[entries.row(at)];
             int j = where[entries.column(at)];
-            double re = 0;
-            double im = 0;
-            for (int c = 0; c < width; c++) {
-                double fr = fed.real(i, c);
-                double fi = fed.imaginary(i, c);
-                double gr = columns.real(j, c);
-                double gi = columns.imaginary(j, c);
-                re += fr * gr + fi * gi;
-                im += fi * gr - fr * gi;
-            }
-            // Re (GΓG†)_ij S_ji, the same for the pair turned round
-            double share = re * sr + im * si;
-            values[siteOf[entries.row(at)]] += share;
-            if (i != j) {
-                values[siteOf[entries.column(at)]] += share;
+            for (int kind = 0; kind < shares.length; kind++) {
+                Dense a = spread.values()[kind];
+                double share = a.real(i, j) * sr + a.imaginary(i, j) * si;
+                shares[kind][siteOf[entries.row(at)]] += share;
+                if (i != j) {
+                    shares[kind][siteOf[entries.column(at)]] += share;
+                }
             }
         }
     }

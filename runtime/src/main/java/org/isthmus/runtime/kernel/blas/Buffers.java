@@ -1,6 +1,7 @@
 package org.isthmus.runtime.kernel.blas;
 
 import org.bytedeco.javacpp.DoublePointer;
+import org.bytedeco.javacpp.IntPointer;
 
 /** Room outside the heap for the operands of one product, one per thread, growing to the largest product so far. */
 final class Buffers {
@@ -8,6 +9,7 @@ final class Buffers {
 
     private final DoublePointer[] operands = new DoublePointer[3];
     private final DoublePointer scalar = new DoublePointer(2);
+    private IntPointer pivots = new IntPointer(64);
     private final DoublePointer one = new DoublePointer(1.0, 0.0);
 
     static Buffers ofThread() {
@@ -25,6 +27,15 @@ final class Buffers {
             operands[operand] = buffer;
         }
         return buffer.position(0).put(data, 0, data.length);
+    }
+
+    /** Room for pivots. */
+    IntPointer pivots(int count) {
+        if (pivots.capacity() < count) {
+            pivots.close();
+            pivots = new IntPointer(2L * count);
+        }
+        return pivots;
     }
 
     DoublePointer scalar(double real) {

@@ -5,7 +5,9 @@ import org.bytedeco.javacpp.DoublePointer;
 import org.bytedeco.openblas.global.openblas_full;
 import org.isthmus.runtime.kernel.ComplexBackend;
 import org.isthmus.runtime.kernel.ComplexMatrix;
+import org.isthmus.runtime.kernel.Dense;
 import org.isthmus.runtime.kernel.Op;
+import org.isthmus.runtime.kernel.Reduction;
 import org.isthmus.runtime.kernel.Schur;
 import org.isthmus.runtime.kernel.SingularMatrixException;
 
@@ -76,6 +78,54 @@ public final class NativeBackend implements ComplexBackend {
                 pb,
                 b.rows(),
                 buffers.one(),
+                pc,
+                rows);
+        pc.position(0).get(c.data(), 0, c.data().length);
+    }
+
+    @Override
+    public boolean realArithmetic() {
+        return true;
+    }
+
+    @Override
+    public Reduction eliminate(Dense a, int count) {
+        return new NativeReduction(this, a, count);
+    }
+
+    @Override
+    public void multiplyAdd(double factor, Op opA, Dense a, Op opB, Dense b, Dense c) {
+        if (!a.real()) {
+            multiplyAdd(factor, opA, a.complex(), opB, b.complex(), c.complex());
+            return;
+        }
+        int rows = opA == Op.NONE ? a.rows() : a.columns();
+        int inner = opA == Op.NONE ? a.columns() : a.rows();
+        int innerOfB = opB == Op.NONE ? b.rows() : b.columns();
+        int columns = opB == Op.NONE ? b.columns() : b.rows();
+        if (inner != innerOfB || c.rows() != rows || c.columns() != columns) {
+            throw new IllegalArgumentException("cannot add " + opA + " " + a + " times " + opB + " " + b + " to " + c);
+        }
+        if (rows == 0 || columns == 0 || inner == 0) {
+            return;
+        }
+        Buffers buffers = Buffers.ofThread();
+        DoublePointer pa = buffers.fill(0, a.data());
+        DoublePointer pb = buffers.fill(1, b.data());
+        DoublePointer pc = buffers.fill(2, c.data());
+        openblas_full.cblas_dgemm(
+                openblas_full.CblasColMajor,
+                code(opA),
+                code(opB),
+                rows,
+                columns,
+                inner,
+                factor,
+                pa,
+                a.rows(),
+                pb,
+                b.rows(),
+                1,
                 pc,
                 rows);
         pc.position(0).get(c.data(), 0, c.data().length);
@@ -189,7 +239,7 @@ public final class NativeBackend implements ComplexBackend {
         return a.rows();
     }
 
-    private static void check(int info, String routine) {
+    static void check(int info, String routine) {
         if (info != 0) {
             throw new ArithmeticException("LAPACK's " + routine + " did not succeed (info " + info + ")");
         }
