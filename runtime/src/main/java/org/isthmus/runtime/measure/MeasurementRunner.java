@@ -19,7 +19,6 @@ import org.isthmus.runtime.device.Finding;
 import org.isthmus.runtime.device.Lead;
 import org.isthmus.runtime.device.Measurement;
 import org.isthmus.runtime.device.Measurement.Expectation;
-import org.isthmus.runtime.device.Measurement.NoEnergies;
 import org.isthmus.runtime.device.Severity;
 import org.isthmus.runtime.kernel.ComplexBackend;
 import org.isthmus.runtime.observable.Bench;
@@ -57,7 +56,12 @@ public final class MeasurementRunner {
     public MeasurementResult run(
             DeviceFamily family, Measurement measurement, List<Finding> known, RunListener listener)
             throws RunFailure, InterruptedException {
-        Run run = new Run(family, measurement, listener);
+        Run run;
+        try {
+            run = new Run(family, measurement, listener);
+        } catch (SolveFailure e) {
+            throw failure(e, family, measurement);
+        }
         long start = System.nanoTime();
         ForkJoinPool pool = new ForkJoinPool(threads);
         try {
@@ -118,6 +122,7 @@ public final class MeasurementRunner {
         private final Map<String, Double> shortfalls = new ConcurrentHashMap<>();
         private final AtomicLong done = new AtomicLong();
         private final LongAdder solves = new LongAdder();
+        private long steps;
         private double residual;
         private double equationResidual;
 
@@ -133,6 +138,7 @@ public final class MeasurementRunner {
             }
             recorded.forEach(this::place);
             expected.values().forEach(this::place);
+            steps = tasks.values().stream().mapToLong(t -> 1 + t.axisEnergies()).sum();
         }
 
         private void collect(ExpectedValue value) {
@@ -173,6 +179,11 @@ public final class MeasurementRunner {
                         .toList());
             }
             Device device = adjusted(elaborated.device());
+            for (Lead lead : device.leads()) {
+                if (lead.floating()) {
+                    throw new SolveFailure("Lead '" + lead.name() + "' floats, and floating leads are not solved yet.");
+                }
+            }
             digests.put(values, DeviceDigest.of(device));
             SolvePlan plan = Planner.plan(device);
             List<Contact> contacts = Solvers.contacts(device, backend);
@@ -186,10 +197,9 @@ public final class MeasurementRunner {
         }
 
         private void point(PointTask task, Device device, SolvePlan plan, List<Contact> contacts) {
-            boolean energyAxis = !(measurement.energy() instanceof NoEnergies);
             try (Solver solver = Solvers.open(task.operatingPoint(device), plan, contacts, backend)) {
-                Bench bench = new Bench(solver, task.needs(), measurement.accuracy(), energyAxis);
-                task.observe(bench);
+                Bench bench = new Bench(solver, measurement.accuracy());
+                task.observe(bench, this::step);
                 solves.add(bench.solves());
                 bench.shortfalls().forEach((what, reached) -> shortfalls.merge(what, reached, Math::max));
                 synchronized (this) {
@@ -197,7 +207,12 @@ public final class MeasurementRunner {
                     equationResidual = Math.max(equationResidual, bench.equationResidual());
                 }
             }
-            listener.progress(done.incrementAndGet(), tasks.size());
+            step();
+        }
+
+        /** A point counts as one step more than the energies of its axis. */
+        private void step() {
+            listener.progress(done.incrementAndGet(), steps);
         }
 
         /** A measurement's temperature and electrochemical potential override every lead's. */

@@ -59,23 +59,48 @@ final class PointTask {
         return Voltages.apply(device, voltages, measurement.drop());
     }
 
-    Needs needs() {
+    /** Energies of a fixed axis that will be solved here; 0 where none has to be. */
+    int axisEnergies() {
+        return measurement.energy() instanceof EnergyPoints points && wantsAxis()
+                ? points.values().size()
+                : 0;
+    }
+
+    private boolean wantsAxis() {
+        return requests.stream().anyMatch(this::onAxis);
+    }
+
+    private boolean onAxis(Request request) {
+        return Double.isNaN(request.energy()) && request.resolved(hasEnergyAxis());
+    }
+
+    /** What the requests need of a solve: those that have values at energies, or those that are integrated. */
+    private Needs needs(boolean resolved) {
         Needs needs = Needs.LEADS;
         for (Request request : requests) {
-            needs = needs.and(request.observable().needs());
+            if (request.resolved(hasEnergyAxis()) == resolved) {
+                needs = needs.and(request.observable().needs());
+            }
         }
         return needs;
     }
 
-    /** Takes the samples. */
-    void observe(Bench bench) {
-        double[] axis = energies(bench);
+    /**
+     * Takes the samples.
+     *
+     * @param solved told after each energy of a fixed axis, from any thread
+     */
+    void observe(Bench bench, Runnable solved) {
+        Bench atEnergies = bench.asking(needs(true));
+        Bench overEnergies = bench.asking(needs(false));
+        double[] axis = energies(atEnergies, solved);
         for (Request request : requests) {
+            Bench used = request.resolved(hasEnergyAxis()) ? atEnergies : overEnergies;
             List<ObservableCall> columns = request.observable().columns(request.call(), bench.device());
             double[] energies = energiesOf(request, axis);
             double[][] values = new double[energies.length][];
             for (int e = 0; e < energies.length; e++) {
-                values[e] = at(bench, request, columns, energies[e]);
+                values[e] = at(used, request, columns, energies[e]);
             }
             request.put(point, new Request.Sample(energies, values, columns.size()));
         }
@@ -111,13 +136,12 @@ final class PointTask {
         return all == null ? new double[0] : all;
     }
 
-    private double[] energies(Bench bench) {
+    private double[] energies(Bench bench, Runnable solved) {
         double[] axis = new double[0];
         if (measurement.energy() instanceof EnergyPoints points) {
             axis = points.values().stream().mapToDouble(e -> e).toArray();
-            boolean wanted = requests.stream().anyMatch(r -> r.resolved(true) && Double.isNaN(r.energy()));
-            if (wanted) {
-                bench.announce(axis);
+            if (wantsAxis()) {
+                bench.announce(axis, solved);
             }
         } else if (measurement.energy() instanceof AdaptiveEnergies adaptive) {
             axis = adaptive(bench, adaptive);
@@ -127,9 +151,10 @@ final class PointTask {
 
     /** Halves intervals until the straight line between neighbours is good to the tolerance at the middle of each. */
     private double[] adaptive(Bench bench, AdaptiveEnergies wanted) {
-        List<Request> watched = requests.stream()
-                .filter(r -> r.resolved(true) && Double.isNaN(r.energy()))
-                .toList();
+        List<Request> watched = requests.stream().filter(this::onAxis).toList();
+        if (watched.isEmpty()) {
+            return new double[0];
+        }
         TreeMap<Double, double[]> known = new TreeMap<>();
         double[] first = new double[FIRST_ENERGIES];
         for (int k = 0; k < FIRST_ENERGIES; k++) {

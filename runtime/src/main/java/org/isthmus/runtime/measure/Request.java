@@ -7,6 +7,7 @@ import java.util.Map;
 import org.isthmus.runtime.device.AxisPosition;
 import org.isthmus.runtime.device.ObservableCall;
 import org.isthmus.runtime.observable.Observable;
+import org.isthmus.runtime.solve.SolveFailure;
 
 /** An observable that is wanted at points, and the samples that were taken of it. */
 final class Request {
@@ -27,7 +28,11 @@ final class Request {
 
     Request(ObservableCall call, List<AxisPosition> at, Grid grid) {
         this.call = call;
-        observable = Observable.named(call.observable());
+        if (!call.matrix().isEmpty()) {
+            throw new SolveFailure("'" + call + "' is not solved yet: the flow of a quantity other than charge.");
+        }
+        observable = Observable.named(call.observable())
+                .orElseThrow(() -> new SolveFailure("'" + call.observable() + "' is not solved yet."));
         fixed = new double[grid.axes()];
         Arrays.fill(fixed, Double.NaN);
         double chosen = Double.NaN;
@@ -37,7 +42,7 @@ final class Request {
             } else {
                 int axis = grid.indexOf(position.axis());
                 if (axis < 0) {
-                    throw new IllegalArgumentException("'" + position.axis() + "' is no axis of this measurement");
+                    throw new SolveFailure("'" + position.axis() + "' is no axis of this measurement.");
                 }
                 fixed[axis] = position.value();
             }

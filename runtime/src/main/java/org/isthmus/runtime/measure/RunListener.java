@@ -7,10 +7,10 @@ public interface RunListener {
     RunListener NONE = (done, total) -> {};
 
     /**
-     * A point is done.
+     * A step is done: an energy of a fixed axis, or all else at a point.
      *
-     * @param done points done so far
-     * @param total points in all
+     * @param done steps done so far
+     * @param total steps in all
      */
     void progress(long done, long total);
 }

@@ -4,15 +4,17 @@ import java.util.ArrayList;
 import java.util.List;
 import java.util.Map;
 import org.isthmus.runtime.device.Device;
-import org.isthmus.runtime.device.LatticeLead;
 import org.isthmus.runtime.device.Lead;
 import org.isthmus.runtime.device.Measurement.Drop;
 import org.isthmus.runtime.device.SiteTable;
+import org.isthmus.runtime.device.WideBandLead;
 import org.isthmus.runtime.solve.OperatingPoint;
 import org.isthmus.runtime.solve.OperatingPoint.LeadState;
+import org.isthmus.runtime.solve.SolveFailure;
 
 /**
- * What voltages do to a device: a voltage V on a lead moves its µ, and the bands of a lead from a side, by −qV; the body
+ * What voltages do to a device: a voltage V on a lead moves its µ and its bands by −qV (a wide-band contact has
+ * none to move); the body
  * follows as {@code drop} says.
  */
 final class Voltages {
@@ -25,7 +27,10 @@ final class Voltages {
             double volts = voltages.getOrDefault(lead.name(), 0.0);
             any |= volts != 0;
             states.add(new LeadState(
-                    lead.mu() - volts, lead.temperature(), lead instanceof LatticeLead ? 0.0 - volts : 0));
+                    lead.mu() - volts, lead.temperature(), lead instanceof WideBandLead ? 0 : 0.0 - volts));
+        }
+        if (any && drop == Drop.POISSON) {
+            throw new SolveFailure("'drop = poisson' is not solved yet.");
         }
         double[] shift = any && drop == Drop.LINEAR ? linear(device, voltages) : new double[0];
         return new OperatingPoint(device, states, shift);
@@ -35,8 +40,8 @@ final class Voltages {
     private static double[] linear(Device device, Map<String, Double> voltages) {
         List<Lead> given = device.leads().stream().filter(l -> !l.floating()).toList();
         if (given.size() != 2) {
-            throw new IllegalArgumentException("a linear drop lies between two leads, but device '" + device.name()
-                    + "' has " + given.size() + " with a given electrochemical potential");
+            throw new SolveFailure("a linear drop lies between two leads, but device '" + device.name() + "' has "
+                    + given.size() + " with a given electrochemical potential.");
         }
         SiteTable sites = device.sites();
         double[] a = mean(sites, given.get(0));

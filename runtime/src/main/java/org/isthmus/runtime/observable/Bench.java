@@ -4,12 +4,16 @@ import java.util.ArrayList;
 import java.util.Arrays;
 import java.util.List;
 import java.util.Map;
+import java.util.TreeMap;
 import java.util.TreeSet;
 import java.util.concurrent.ConcurrentHashMap;
 import java.util.concurrent.atomic.AtomicLong;
+import java.util.concurrent.atomic.DoubleAccumulator;
 import java.util.function.DoubleFunction;
+import java.util.function.Supplier;
 import java.util.stream.IntStream;
 import org.isthmus.runtime.device.Device;
+import org.isthmus.runtime.device.LatticeLead;
 import org.isthmus.runtime.solve.EnergySolution;
 import org.isthmus.runtime.solve.Needs;
 import org.isthmus.runtime.solve.OperatingPoint.LeadState;
@@ -25,31 +29,48 @@ public final class Bench {
     private final Solver solver;
     private final Needs needs;
     private final double accuracy;
-    private final boolean energyAxis;
-    private final Map<Double, EnergySolution> solved = new ConcurrentHashMap<>();
-    private final AtomicLong solves = new AtomicLong();
-    private final Map<String, Double> shortfalls = new ConcurrentHashMap<>();
+    private final Store store;
 
     /**
-     * Sets up.
+     * Sets up, asking for no more than what goes between the leads.
      *
-     * @param needs of all observables together
      * @param accuracy relative accuracy of integrals
-     * @param energyAxis true where the measurement records values at energies
      */
-    public Bench(Solver solver, Needs needs, double accuracy, boolean energyAxis) {
+    public Bench(Solver solver, double accuracy) {
+        this(solver, Needs.LEADS, accuracy, new Store());
+    }
+
+    private Bench(Solver solver, Needs needs, double accuracy, Store store) {
         this.solver = solver;
         this.needs = needs;
         this.accuracy = accuracy;
-        this.energyAxis = energyAxis;
+        this.store = store;
+    }
+
+    /** The same bench, with the same energies solved, whose solutions hold what is needed. */
+    public Bench asking(Needs wanted) {
+        return new Bench(solver, wanted, accuracy, store);
+    }
+
+    /** A solution and what was asked of it. */
+    private record Known(EnergySolution solution, Needs needs) {
+        boolean covers(Needs wanted) {
+            return needs.and(wanted).equals(needs);
+        }
+    }
+
+    /** What all views of one bench share. */
+    private static final class Store {
+        private final Map<Double, Known> solved = new ConcurrentHashMap<>();
+        private final Map<String, double[]> integrals = new ConcurrentHashMap<>();
+        private final AtomicLong solves = new AtomicLong();
+        private final Map<String, Double> shortfalls = new ConcurrentHashMap<>();
+        private final DoubleAccumulator conservation = new DoubleAccumulator(Math::max, 0);
+        private final DoubleAccumulator equations = new DoubleAccumulator(Math::max, 0);
     }
 
     public Device device() {
         return solver.operatingPoint().device();
-    }
-
-    public boolean energyAxis() {
-        return energyAxis;
     }
 
     int leads() {
@@ -70,35 +91,44 @@ public final class Bench {
 
     /** The solution at an energy. */
     public EnergySolution at(double energy) {
-        EnergySolution known = solved.get(energy);
-        if (known == null) {
-            known = solver.solve(energy, needs);
-            solves.incrementAndGet();
-            solved.putIfAbsent(energy, known);
+        Known known = store.solved.get(energy);
+        if (known == null || !known.covers(needs)) {
+            Needs all = known == null ? needs : known.needs().and(needs);
+            known = new Known(solver.solve(energy, all), all);
+            store.solves.incrementAndGet();
+            store.equations.accumulate(known.solution().equationResidual());
+            store.conservation.accumulate(violation(known.solution()));
+            store.solved.put(energy, known);
         }
-        return known;
+        return known.solution();
     }
 
     /** Solves energies that will be asked for, side by side. */
     public void announce(double[] energies) {
-        double[] missing = Arrays.stream(energies)
-                .distinct()
-                .filter(e -> !solved.containsKey(e))
-                .toArray();
-        IntStream.range(0, missing.length).parallel().forEach(k -> at(missing[k]));
+        announce(energies, () -> {});
+    }
+
+    /**
+     * Solves energies that will be asked for, side by side.
+     *
+     * @param solved told after each, from any thread
+     */
+    public void announce(double[] energies, Runnable solved) {
+        double[] distinct = Arrays.stream(energies).distinct().toArray();
+        IntStream.range(0, distinct.length).parallel().forEach(k -> {
+            at(distinct[k]);
+            solved.run();
+        });
     }
 
     /** Number of energies solved so far. */
     public long solves() {
-        return solves.get();
+        return store.solves.get();
     }
 
     /** Largest residual of any equation solved so far. */
     public double equationResidual() {
-        return solved.values().stream()
-                .mapToDouble(EnergySolution::equationResidual)
-                .max()
-                .orElse(0);
+        return store.equations.get();
     }
 
     /**
@@ -106,26 +136,36 @@ public final class Bench {
      * energies solved, relative to the largest such trace: zero but for rounding where no electron is lost.
      */
     public double conservationResidual() {
-        double worst = 0;
-        for (EnergySolution solution : solved.values()) {
-            double largest = 0;
-            double violation = 0;
-            for (int p = 0; p < solution.leadCount(); p++) {
-                double sum = 0;
-                for (int q = 0; q < solution.leadCount(); q++) {
-                    sum += solution.transmission(q, p);
-                }
-                largest = Math.max(largest, Math.abs(solution.spectralTrace(p)));
-                violation = Math.max(violation, Math.abs(solution.spectralTrace(p) - sum));
+        return store.conservation.get();
+    }
+
+    private static double violation(EnergySolution solution) {
+        double largest = 0;
+        double violation = 0;
+        for (int p = 0; p < solution.leadCount(); p++) {
+            double sum = 0;
+            for (int q = 0; q < solution.leadCount(); q++) {
+                sum += solution.transmission(q, p);
             }
-            worst = largest < 1e-14 ? worst : Math.max(worst, violation / largest);
+            largest = Math.max(largest, Math.abs(solution.spectralTrace(p)));
+            violation = Math.max(violation, Math.abs(solution.spectralTrace(p) - sum));
         }
-        return worst;
+        return largest < 1e-14 ? 0 : violation / largest;
     }
 
     /** Integrals that did not reach the accuracy asked for, with what they reached. */
     public Map<String, Double> shortfalls() {
-        return new java.util.TreeMap<>(shortfalls);
+        return new TreeMap<>(store.shortfalls);
+    }
+
+    /** A set of integrals that several columns share: computed when first asked for. */
+    double[] once(String integrals, Supplier<double[]> computed) {
+        double[] known = store.integrals.get(integrals);
+        if (known == null) {
+            known = computed.get();
+            store.integrals.put(integrals, known);
+        }
+        return known;
     }
 
     Solver solver() {
@@ -138,7 +178,7 @@ public final class Bench {
 
     void shortfall(String what, double reached) {
         if (reached > 10 * accuracy) {
-            shortfalls.merge(what, reached, Math::max);
+            store.shortfalls.merge(what, reached, Math::max);
         }
     }
 
@@ -210,11 +250,15 @@ public final class Bench {
             lowest = Math.min(lowest, lead(p).mu() - width);
             highest = Math.max(highest, lead(p).mu() + width);
         }
-        double[] bounds = solver.spectrumBounds();
-        boolean wide = device().leads().stream().anyMatch(l -> !(l instanceof org.isthmus.runtime.device.LatticeLead));
-        if (wide) {
+        return within(lowest, highest);
+    }
+
+    /** The part of a window in which something can flow: lattice leads have no waves outside the spectrum. */
+    private double[] within(double lowest, double highest) {
+        if (device().leads().stream().anyMatch(lead -> !(lead instanceof LatticeLead))) {
             return new double[] {lowest, highest};
         }
+        double[] bounds = solver.spectrumBounds();
         return new double[] {Math.max(lowest, bounds[0]), Math.min(highest, bounds[1])};
     }
 
@@ -227,15 +271,12 @@ public final class Bench {
             return weight.apply(state.mu());
         }
         double width = Fermi.TAIL * Fermi.kT(state);
-        double[] bounds = solver.spectrumBounds();
-        boolean wide = device().leads().stream().anyMatch(l -> !(l instanceof org.isthmus.runtime.device.LatticeLead));
-        double lowest = wide ? state.mu() - width : Math.max(state.mu() - width, bounds[0]);
-        double highest = wide ? state.mu() + width : Math.min(state.mu() + width, bounds[1]);
-        if (!(highest > lowest)) {
-            double[] shape = weight.apply(state.mu());
-            return new double[shape.length];
+        double[] window = within(state.mu() - width, state.mu() + width);
+        if (!(window[1] > window[0])) {
+            // the whole window lies outside the spectrum: nothing flows
+            return new double[weight.apply(state.mu()).length];
         }
-        return integral(what, lowest, highest, energy -> {
+        return integral(what, window[0], window[1], energy -> {
             double[] values = weight.apply(energy).clone();
             double slope = Fermi.slope(state, energy);
             for (int c = 0; c < values.length; c++) {

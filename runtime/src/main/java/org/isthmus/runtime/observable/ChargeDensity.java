@@ -3,24 +3,30 @@ package org.isthmus.runtime.observable;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.function.DoubleFunction;
-import org.apache.commons.math3.complex.Complex;
 import org.isthmus.runtime.device.ObservableCall;
+import org.isthmus.runtime.device.SiteTable;
 import org.isthmus.runtime.solve.EnergySolution;
 import org.isthmus.runtime.solve.Needs;
 import org.isthmus.runtime.solve.OperatingPoint.LeadState;
-import org.isthmus.runtime.units.PhysicalConstants;
+import org.isthmus.runtime.solve.Solver;
 
 /**
- * Electrons per site: the part in equilibrium with the lead of the lowest µ, −(g/π) Im ∫ f G dE, along a contour above the
- * real axis with the poles of f below it (Zeller, Deutz & Dederichs, Solid State Commun. 44, 993 (1982)), plus what the
- * other leads add, (g/2π) ∫ Σ_p (f_p − f_ref) A_p dE, on the real axis. States that no lead reaches are filled like the
- * first part.
+ * Electrons per site: what would be there in equilibrium with the lead of the lowest µ, and what the other leads add at the
+ * energies where they differ from it, (g/2π) ∫ Σ_p (f_p − f_ref) A_p dE on the real axis.
+ *
+ * <p>The equilibrium part is −(g/π) Im ∫ f G S dE with the path moved off the real axis, where G is smooth. Poles of f lie at
+ * z_n = µ + iπkT(2n + 1). The path comes down from +i∞ at an energy where f is one, crosses above the first M poles, where f
+ * is what it is on the real axis, and leaves the poles to the residue theorem; far out G S → 1/z, whatever the contacts:
+ * n = ½·orbitals + 2kT Σ_n Re G(z_n) + (1/π) ∫ Re G dy (the way down) − (1/π) ∫ f Im G dx (the crossing). The idea is that of
+ * Zeller, Deutz & Dederichs, Solid State Commun. 44, 993 (1982). States that no lead reaches are filled like this part.
  */
 public final class ChargeDensity extends Observable {
-    private static final double HEIGHT = 0.3;
-    private static final int MOST_POLES = 40;
-    private static final double BELOW = 20;
-    private static final int ARC_PANELS = 4;
+    /** Height of the crossing that is aimed at, eV. */
+    private static final double HEIGHT = 0.2;
+
+    private static final int MOST_POLES = 20;
+
+    private static final int PANELS = 4;
 
     public ChargeDensity() {
         super("density", new Needs(true, false));
@@ -63,125 +69,63 @@ public final class ChargeDensity extends Observable {
         return sum;
     }
 
-    private double[] equilibrium(Bench bench, LeadState lead) {
-        double[] bounds = bench.solver().spectrumBounds();
-        double bottom = bottom(bench, lead, bounds[0]);
+    private static double[] equilibrium(Bench bench, LeadState lead) {
+        Solver solver = bench.solver();
+        SiteTable sites = bench.device().sites();
+        double[] density = new double[sites.count()];
+        for (int site = 0; site < density.length; site++) {
+            density[site] = 0.5 * sites.orbitals(site);
+        }
         double kT = Fermi.kT(lead);
         int poles = kT == 0 ? 0 : (int) Math.max(1, Math.min(MOST_POLES, Math.ceil(HEIGHT / (2 * Math.PI * kT))));
         double height = 2 * Math.PI * kT * poles;
-        double corner = lead.mu() - BELOW * kT;
-        double[] sum = new double[bench.device().sites().count()];
-        if (corner > bottom) {
-            addArc(bench, lead, bottom, corner, height, sum);
-        } else {
-            corner = bottom;
-            addLine(
-                    bench,
-                    sum,
-                    y -> {
-                        Complex z = new Complex(bottom, y);
-                        return weighted(bench, z, fermi(lead, z).multiply(Complex.I));
-                    },
-                    0,
-                    height);
-        }
-        if (height > 0) {
-            double start = corner;
-            addLine(
-                    bench,
-                    sum,
-                    x -> {
-                        Complex z = new Complex(x, height);
-                        return weighted(bench, z, fermi(lead, z));
-                    },
-                    start,
-                    lead.mu() + Fermi.TAIL * kT);
-        }
-        for (int n = 0; n < poles; n++) {
-            // −2πi kT G(z_n) for every pole below the contour; its imaginary part is −2πkT Re G
-            double[] green = bench.solver().siteGreens(lead.mu(), Math.PI * kT * (2 * n + 1));
-            for (int site = 0; site < sum.length; site++) {
-                sum[site] -= 2 * Math.PI * kT * green[2 * site];
+        double left = lead.mu() - Fermi.TAIL * kT;
+        double[] bounds = solver.spectrumBounds();
+        double scale = Math.max(1e-3, 0.25 * (bounds[1] - bounds[0]));
+        // y = height + scale·u/(1 − u), so that the way down from infinity is an interval
+        add(density, 1 / Math.PI, line(bench, 0, 1, u -> {
+            double rest = 1 - u;
+            double[] green = solver.siteGreens(left, height + scale * u / rest);
+            return parts(green, scale / (rest * rest), 0);
+        }));
+        if (poles > 0) {
+            double right = lead.mu() + Fermi.TAIL * kT;
+            add(density, -1 / Math.PI, line(bench, left, right, x -> {
+                double[] green = solver.siteGreens(x, height);
+                return parts(green, 0, Fermi.occupation(lead, x));
+            }));
+            for (int n = 0; n < poles; n++) {
+                add(density, 2 * kT, parts(solver.siteGreens(lead.mu(), Math.PI * kT * (2 * n + 1)), 1, 0));
             }
         }
-        for (int site = 0; site < sum.length; site++) {
-            sum[site] *= -bench.degeneracy() / Math.PI;
+        for (int site = 0; site < density.length; site++) {
+            density[site] *= bench.degeneracy();
         }
-        return sum;
+        return density;
     }
 
-    /**
-     * Start of the contour, below every state. A wide-band contact has a tail without end, ∝ 1/E²: the contour then starts
-     * so far below that what is left out is less than the accuracy of a plot, 1e-6 electrons.
-     */
-    private static double bottom(Bench bench, LeadState lead, double lowest) {
-        double margin = 0.5 + 20 * Fermi.kT(lead);
-        double start = Math.min(lowest, lead.mu()) - margin;
-        double broadening = bench.device().leads().stream()
-                .filter(org.isthmus.runtime.device.WideBandLead.class::isInstance)
-                .flatMap(l -> ((org.isthmus.runtime.device.WideBandLead) l).broadening().stream())
-                .mapToDouble(b -> b)
-                .sum();
-        return broadening == 0 ? start : start - broadening * 1e6;
-    }
-
-    /** The circle about a point of the real axis from the bottom to the corner above the real axis. */
-    private void addArc(Bench bench, LeadState lead, double bottom, double corner, double height, double[] sum) {
-        double width = corner - bottom;
-        double radius = (width * width + height * height) / (2 * width);
-        double centre = bottom + radius;
-        double end = Math.atan2(height, corner - centre);
-        // far from the real axis G changes on the scale of the distance to the spectrum: equal steps of its logarithm
-        addLine(
-                bench,
-                sum,
-                s -> {
-                    double angle = Math.PI + (end - Math.PI) * s;
-                    Complex direction = new Complex(Math.cos(angle), Math.sin(angle));
-                    Complex z = direction.multiply(radius).add(centre);
-                    Complex step = direction.multiply(Complex.I).multiply(radius * (end - Math.PI));
-                    return weighted(
-                            bench,
-                            new Complex(z.getReal(), Math.max(z.getImaginary(), Double.MIN_NORMAL)),
-                            fermi(lead, z).multiply(step));
-                },
-                0,
-                1);
-    }
-
-    private void addLine(Bench bench, double[] sum, DoubleFunction<double[]> integrand, double from, double to) {
+    private static double[] line(Bench bench, double from, double to, DoubleFunction<double[]> integrand) {
         List<Double> breaks = new ArrayList<>();
-        for (int k = 0; k <= ARC_PANELS; k++) {
-            breaks.add(from + (to - from) * k / ARC_PANELS);
+        for (int k = 0; k <= PANELS; k++) {
+            breaks.add(from + (to - from) * k / PANELS);
         }
         EnergyIntegral.Result result = EnergyIntegral.alongContour(breaks, integrand, bench.accuracy());
-        bench.shortfall(name(), result.relativeError());
-        for (int site = 0; site < sum.length; site++) {
-            sum[site] += result.values()[site];
-        }
+        bench.shortfall("density", result.relativeError());
+        return result.values();
     }
 
-    /** Im[weight·G_ii(z)] per site. */
-    private static double[] weighted(Bench bench, Complex z, Complex weight) {
-        double[] green = bench.solver().siteGreens(z.getReal(), z.getImaginary());
+    /** real·Re G + imaginary·Im G per site. */
+    private static double[] parts(double[] green, double real, double imaginary) {
         double[] values = new double[green.length / 2];
         for (int site = 0; site < values.length; site++) {
-            values[site] = weight.getReal() * green[2 * site + 1] + weight.getImaginary() * green[2 * site];
+            values[site] = real * green[2 * site] + imaginary * green[2 * site + 1];
         }
         return values;
     }
 
-    private static Complex fermi(LeadState lead, Complex z) {
-        if (lead.temperature() == 0) {
-            return Complex.ONE;
+    private static void add(double[] sum, double factor, double[] values) {
+        for (int site = 0; site < sum.length; site++) {
+            sum[site] += factor * values[site];
         }
-        double x = (z.getReal() - lead.mu()) / (PhysicalConstants.KB * lead.temperature());
-        double y = z.getImaginary() / (PhysicalConstants.KB * lead.temperature());
-        if (x > 0) {
-            Complex small = new Complex(Math.exp(-x) * Math.cos(y), -Math.exp(-x) * Math.sin(y));
-            return small.divide(small.add(1));
-        }
-        Complex small = new Complex(Math.exp(x) * Math.cos(y), Math.exp(x) * Math.sin(y));
-        return small.add(1).reciprocal();
     }
 }

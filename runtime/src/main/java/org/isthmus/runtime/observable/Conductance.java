@@ -14,8 +14,6 @@ public final class Conductance extends Observable {
     public double[] values(Bench bench, ObservableCall column, double energy) {
         int from = bench.index(column.leads().get(0));
         int to = bench.index(column.leads().get(1));
-        double[] integral = bench.linearResponse(
-                name(), from, e -> new double[] {bench.at(e).transmission(from, to)});
-        return new double[] {bench.degeneracy() / PhysicalConstants.H * integral[0]};
+        return new double[] {bench.degeneracy() / PhysicalConstants.H * LinearResponse.passing(bench, from, to)};
     }
 }

@@ -1,6 +1,5 @@
 package org.isthmus.runtime.observable;
 
-import java.util.function.DoubleUnaryOperator;
 import org.isthmus.runtime.device.ObservableCall;
 import org.isthmus.runtime.solve.EnergySolution;
 import org.isthmus.runtime.solve.Needs;
@@ -19,7 +18,7 @@ public final class Current extends Observable {
         if (!Double.isNaN(energy)) {
             return new double[] {factor * spectral(bench, lead, energy)};
         }
-        return new double[] {factor * integrated(bench, name(), lead, e -> 1)};
+        return new double[] {factor * integrated(bench)[lead]};
     }
 
     /** Σ_q T(q→p) (f_q − f_p): conventional current per energy, without (g q/h). */
@@ -35,16 +34,30 @@ public final class Current extends Observable {
         return sum;
     }
 
-    static double integrated(Bench bench, String what, int lead, DoubleUnaryOperator weight) {
-        if (inEquilibrium(bench)) {
-            return 0;
-        }
+    /** ∫ Σ_q T(q→p) (f_q − f_p) dE for every lead p, eV. */
+    static double[] integrated(Bench bench) {
+        return bench.once("current", () -> flows(bench, "current", (lead, energy) -> 1));
+    }
+
+    /** The weight of an energy in a flow at a lead. */
+    interface Weight {
+        double at(int lead, double energy);
+    }
+
+    /** Flows at all leads over the same energies, so that what enters and what leaves are equal to the last digits. */
+    static double[] flows(Bench bench, String what, Weight weight) {
+        int n = bench.leads();
         double[] window = bench.thermalWindow(Fermi.TAIL);
-        if (!(window[1] > window[0])) {
-            return 0;
+        if (inEquilibrium(bench) || !(window[1] > window[0])) {
+            return new double[n];
         }
-        return bench.integral(what, window[0], window[1], e ->
-                new double[] {weight.applyAsDouble(e) * spectral(bench, lead, e)})[0];
+        return bench.integral(what, window[0], window[1], energy -> {
+            double[] flows = new double[n];
+            for (int lead = 0; lead < n; lead++) {
+                flows[lead] = weight.at(lead, energy) * spectral(bench, lead, energy);
+            }
+            return flows;
+        });
     }
 
     static boolean inEquilibrium(Bench bench) {

@@ -78,12 +78,13 @@ final class EnergyIntegral {
                 open.add(new Panel(breaks.get(k), breaks.get(k + 1), 0, 1, 0));
             }
         }
+        int first = open.size();
         List<Done> done = new ArrayList<>();
         while (!open.isEmpty()) {
             announce(open);
-            for (Panel panel : open) {
-                done.add(evaluate(panel, integrand));
-            }
+            done.addAll(open.parallelStream()
+                    .map(panel -> evaluate(panel, integrand))
+                    .toList());
             open = new ArrayList<>();
             if (done.isEmpty() || done.get(0).value().length == 0 || done.size() > MOST_PANELS) {
                 break;
@@ -96,7 +97,7 @@ final class EnergyIntegral {
                 boolean refine = false;
                 for (int c = 0; c < total.length; c++) {
                     double allowed = accuracy * Math.max(total[c], 1e-6 * largest);
-                    refine |= error[c] > allowed && one.error()[c] > allowed * share(one.panel()) * 0.5;
+                    refine |= error[c] > allowed && one.error()[c] > allowed * share(one.panel()) / first;
                 }
                 if (refine && one.panel().depth() < DEEPEST) {
                     Panel p = one.panel();

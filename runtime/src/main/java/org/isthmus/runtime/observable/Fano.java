@@ -23,8 +23,8 @@ public final class Fano extends Observable {
             double t = solution.transmission(from, to);
             return new double[] {t > 0 ? 1 - solution.transmissionSquared(from, to) / t : Double.NaN};
         }
-        double current = bench.degeneracy() / PhysicalConstants.H * Current.integrated(bench, name(), to, e -> 1);
-        double noise = Noise.spectralDensity(bench, name(), from, to);
+        double current = bench.degeneracy() / PhysicalConstants.H * Current.integrated(bench)[to];
+        double noise = Noise.spectralDensity(bench, from, to);
         return new double[] {current == 0 ? Double.NaN : Math.abs(noise) / (2 * Math.abs(current))};
     }
 }

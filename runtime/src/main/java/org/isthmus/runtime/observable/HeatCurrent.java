@@ -13,8 +13,9 @@ public final class HeatCurrent extends Observable {
     @Override
     public double[] values(Bench bench, ObservableCall column, double energy) {
         int lead = bench.index(column.leads().get(0));
-        double mu = bench.lead(lead).mu();
-        double flow = Current.integrated(bench, name(), lead, e -> -(e - mu));
-        return new double[] {bench.degeneracy() / PhysicalConstants.H * flow};
+        double[] flows = bench.once(
+                name(),
+                () -> Current.flows(bench, name(), (p, e) -> -(e - bench.lead(p).mu())));
+        return new double[] {bench.degeneracy() / PhysicalConstants.H * flows[lead]};
     }
 }

@@ -36,16 +36,26 @@ public final class Noise extends Observable {
     public double[] values(Bench bench, ObservableCall column, double energy) {
         int a = bench.index(column.leads().get(0));
         int b = bench.index(column.leads().get(1));
-        return new double[] {spectralDensity(bench, name(), a, b)};
+        return new double[] {spectralDensity(bench, a, b)};
     }
 
-    static double spectralDensity(Bench bench, String what, int a, int b) {
+    static double spectralDensity(Bench bench, int a, int b) {
+        int n = bench.leads();
+        return bench.degeneracy() / PhysicalConstants.H * bench.once("noise", () -> integrals(bench, n))[a * n + b];
+    }
+
+    private static double[] integrals(Bench bench, int n) {
         double[] window = bench.thermalWindow(Fermi.TAIL);
         if (!(window[1] > window[0])) {
-            return 0;
+            return new double[n * n];
         }
-        double integral = bench.integral(what, window[0], window[1], e -> new double[] {density(bench, a, b, e)})[0];
-        return bench.degeneracy() / PhysicalConstants.H * integral;
+        return bench.integral("noise", window[0], window[1], energy -> {
+            double[] all = new double[n * n];
+            for (int k = 0; k < all.length; k++) {
+                all[k] = density(bench, k / n, k % n, energy);
+            }
+            return all;
+        });
     }
 
     private static double density(Bench bench, int a, int b, double energy) {

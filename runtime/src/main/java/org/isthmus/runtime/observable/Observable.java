@@ -2,6 +2,7 @@ package org.isthmus.runtime.observable;
 
 import java.util.ArrayList;
 import java.util.List;
+import java.util.Optional;
 import org.isthmus.runtime.catalogue.Catalogue;
 import org.isthmus.runtime.catalogue.ObservableEntry;
 import org.isthmus.runtime.device.Device;
@@ -23,11 +24,9 @@ public abstract class Observable implements ObservableEntry {
         this.needs = needs;
     }
 
-    /** The observable with this name, where the solver has it. */
-    public static Observable named(String name) {
-        return (Observable) Catalogue.observable(name)
-                .filter(Observable.class::isInstance)
-                .orElseThrow(() -> new IllegalArgumentException("'" + name + "' is not solved yet"));
+    /** The observable with this name; empty where the solver has none. */
+    public static Optional<Observable> named(String name) {
+        return Catalogue.observable(name).filter(Observable.class::isInstance).map(Observable.class::cast);
     }
 
     @Override

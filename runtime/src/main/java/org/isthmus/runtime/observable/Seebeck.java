@@ -13,15 +13,12 @@ public final class Seebeck extends Observable {
     public double[] values(Bench bench, ObservableCall column, double energy) {
         int from = bench.index(column.leads().get(0));
         int to = bench.index(column.leads().get(1));
-        double mu = bench.lead(from).mu();
         double temperature = bench.lead(from).temperature();
-        double[] moments = bench.linearResponse(name(), from, e -> {
-            double t = bench.at(e).transmission(from, to);
-            return new double[] {t, t * (e - mu)};
-        });
-        if (moments[0] == 0) {
+        double passing = LinearResponse.passing(bench, from, to);
+        if (passing == 0) {
             return new double[] {Double.NaN};
         }
-        return new double[] {temperature == 0 ? 0 : -moments[1] / (temperature * moments[0])};
+        double heat = LinearResponse.heat(bench, from, to);
+        return new double[] {temperature == 0 ? 0 : -heat / (temperature * passing)};
     }
 }
