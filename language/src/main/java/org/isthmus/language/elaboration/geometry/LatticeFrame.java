@@ -158,7 +158,8 @@ public final class LatticeFrame {
         return basis[site][axis];
     }
 
-    double origin(int axis) {
+    /** Coordinate of the zero cell, nm. */
+    public double origin(int axis) {
         return origin[axis];
     }
 
@@ -193,5 +194,22 @@ public final class LatticeFrame {
             }
         }
         return d;
+    }
+
+    /** The whole numbers of lattice vectors that make a displacement, within the border tolerance; null where none do. */
+    public int[] cells(double[] displacement) {
+        int[] cells = new int[3];
+        for (int i = 0; i < dimension; i++) {
+            double number = Math.rint(Vectors.dot(duals[i], displacement));
+            if (!(Math.abs(number) < 1e6)) {
+                return null;
+            }
+            cells[i] = (int) number;
+        }
+        double[] made = translation(cells);
+        for (int axis = 0; axis < 3; axis++) {
+            made[axis] -= displacement[axis];
+        }
+        return Vectors.length(made) <= tolerance() ? cells : null;
     }
 }
