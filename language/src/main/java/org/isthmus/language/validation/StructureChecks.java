@@ -1,0 +1,213 @@
+package org.isthmus.language.validation;
+
+import java.util.HashSet;
+import java.util.List;
+import java.util.Set;
+import org.eclipse.emf.ecore.EObject;
+import org.eclipse.xtext.EcoreUtil2;
+import org.eclipse.xtext.validation.Check;
+import org.isthmus.language.evaluation.Environment;
+import org.isthmus.language.evaluation.EvaluationFailure;
+import org.isthmus.language.evaluation.Evaluator;
+import org.isthmus.language.evaluation.Value;
+import org.isthmus.language.findings.IssueCode;
+import org.isthmus.language.isthmus.Across;
+import org.isthmus.language.isthmus.Argument;
+import org.isthmus.language.isthmus.DephasingDeclaration;
+import org.isthmus.language.isthmus.DeviceDeclaration;
+import org.isthmus.language.isthmus.Floating;
+import org.isthmus.language.isthmus.IsthmusPackage;
+import org.isthmus.language.isthmus.LatticeDeclaration;
+import org.isthmus.language.isthmus.LatticeUse;
+import org.isthmus.language.isthmus.LeadDeclaration;
+import org.isthmus.language.isthmus.LeadSetting;
+import org.isthmus.language.isthmus.Parameter;
+import org.isthmus.language.isthmus.Setting;
+import org.isthmus.language.isthmus.SiteDeclaration;
+import org.isthmus.language.isthmus.VectorDeclaration;
+import org.isthmus.language.structure.DeviceStructure;
+import org.isthmus.language.typing.Suggestion;
+import org.isthmus.runtime.device.Side;
+
+/** What blocks must and must not hold. */
+public class StructureChecks extends ConcernChecks {
+    @Check
+    public void latticeIsComplete(LatticeDeclaration lattice) {
+        long vectors = lattice.getMembers().stream().filter(VectorDeclaration.class::isInstance).count();
+        boolean sites = lattice.getMembers().stream().anyMatch(SiteDeclaration.class::isInstance);
+        if (vectors == 0 || vectors > 3 || !sites) {
+            report(
+                    IssueCode.INCOMPLETE_LATTICE,
+                    lattice,
+                    IsthmusPackage.Literals.DECLARATION__NAME,
+                    "Lattice '" + lattice.getName() + "' has " + vectors + " vectors and "
+                            + (sites ? "its sites" : "no site") + "; it needs one to three vectors and at least one site.");
+        }
+    }
+
+    @Check
+    public void deviceIsComplete(DeviceDeclaration device) {
+        if (DeviceStructure.chain(device).stream().anyMatch(d -> d.getBase() != null && d.getBase().eIsProxy())) {
+            return;
+        }
+        DeviceStructure structure = DeviceStructure.of(device);
+        boolean lattice = structure.lattice().isPresent();
+        boolean body = structure.body().isPresent();
+        if ((!lattice || !body) && !isCyclic(device)) {
+            report(
+                    IssueCode.INCOMPLETE_DEVICE,
+                    device,
+                    IsthmusPackage.Literals.DECLARATION__NAME,
+                    "Device '" + device.getName() + "' has no " + (lattice ? "body" : body ? "lattice" : "lattice and no body")
+                            + "; write 'lattice Chain(a = …);' and 'body box(…);', for example.");
+        }
+    }
+
+    private static boolean isCyclic(DeviceDeclaration device) {
+        Set<DeviceDeclaration> seen = new HashSet<>();
+        for (DeviceDeclaration link = device; link != null; link = link.getBase()) {
+            if (!seen.add(link)) {
+                return true;
+            }
+        }
+        return false;
+    }
+
+    @Check
+    public void argumentGivenTwice(LatticeUse use) {
+        Set<EObject> seen = new HashSet<>();
+        for (Argument argument : use.getArguments()) {
+            if (argument.getParameter() != null && !argument.getParameter().eIsProxy() && !seen.add(argument.getParameter())) {
+                report(
+                        IssueCode.DUPLICATE_NAME,
+                        argument,
+                        IsthmusPackage.Literals.ARGUMENT__PARAMETER,
+                        "'" + argument.getParameter().getName() + "' is given a second time; remove one.");
+            }
+        }
+    }
+
+    @Check
+    public void lead(LeadDeclaration lead) {
+        if (lead.getSide() != null) {
+            side(lead);
+        } else if (lead.getCondition() != null) {
+            on(lead);
+        }
+        Set<String> seen = new HashSet<>();
+        boolean floating = lead.getSettings().stream().anyMatch(Floating.class::isInstance);
+        for (LeadSetting setting : lead.getSettings()) {
+            String name = setting instanceof Setting plain ? plain.getName() : setting instanceof Across ? "across" : "floating";
+            if (name != null && !seen.add(name)) {
+                report(IssueCode.DUPLICATE_NAME, setting, null, "'" + name + "' is given a second time in this lead; remove one.");
+            }
+            if (floating && "mu".equals(name)) {
+                report(
+                        IssueCode.FLOATING_WITH_MU,
+                        setting,
+                        null,
+                        "Lead '" + lead.getName() + "' is floating: its mu is found such that no current flows, so none can be"
+                                + " given; remove 'mu' or 'floating'.");
+            }
+        }
+    }
+
+    private void side(LeadDeclaration lead) {
+        List<String> words = java.util.Arrays.stream(Side.values()).map(Side::word).toList();
+        if (!words.contains(lead.getSide())) {
+            report(
+                    IssueCode.UNKNOWN_SIDE,
+                    lead,
+                    IsthmusPackage.Literals.LEAD_DECLARATION__SIDE,
+                    "'" + lead.getSide() + "' is no side of a body" + Suggestion.phrase(lead.getSide(), words.stream())
+                            + "; there are " + String.join(", ", words) + ".");
+        }
+        for (LeadSetting setting : lead.getSettings()) {
+            if (setting instanceof Setting plain && ("broadening".equals(plain.getName()) || "selfenergy".equals(plain.getName()))) {
+                report(
+                        IssueCode.UNKNOWN_SETTING,
+                        plain,
+                        IsthmusPackage.Literals.SETTING__NAME,
+                        "Lead '" + lead.getName() + "' continues the lattice, so its '" + plain.getName()
+                                + "' follows from it; write 'lead " + lead.getName() + " on …' for a contact given by numbers.");
+            }
+        }
+    }
+
+    private void on(LeadDeclaration lead) {
+        boolean given = false;
+        for (LeadSetting setting : lead.getSettings()) {
+            if (setting instanceof Across) {
+                report(
+                        IssueCode.UNKNOWN_SETTING,
+                        setting,
+                        null,
+                        "'across' picks a part of a side; lead '" + lead.getName() + "' says its sites after 'on'.");
+            }
+            if (setting instanceof Setting plain) {
+                if ("potential".equals(plain.getName())) {
+                    report(
+                            IssueCode.LEAD_WITHOUT_BANDS,
+                            plain,
+                            IsthmusPackage.Literals.SETTING__NAME,
+                            "Lead '" + lead.getName() + "' is given by numbers and has no bands that a potential could shift; remove it.");
+                }
+                boolean source = "broadening".equals(plain.getName()) || "selfenergy".equals(plain.getName());
+                if (source && given) {
+                    report(
+                            IssueCode.DUPLICATE_NAME,
+                            plain,
+                            IsthmusPackage.Literals.SETTING__NAME,
+                            "Lead '" + lead.getName() + "' has both a broadening and a self-energy; keep one.");
+                }
+                given |= source;
+            }
+        }
+        if (!given) {
+            report(
+                    IssueCode.INCOMPLETE_LEAD,
+                    lead,
+                    IsthmusPackage.Literals.DECLARATION__NAME,
+                    "Lead '" + lead.getName() + "' needs 'broadening = …' or 'selfenergy = table(…)'.");
+        }
+    }
+
+    @Check
+    public void dephasing(DephasingDeclaration dephasing) {
+        Set<String> seen = new HashSet<>();
+        dephasing.getSettings().forEach(setting -> {
+            String name = setting instanceof Setting plain ? plain.getName() : setting.eClass().getName();
+            if (name != null && !seen.add(name)) {
+                report(IssueCode.DUPLICATE_NAME, setting, null, "This is given a second time in the dephasing; remove one.");
+            }
+        });
+    }
+
+    /** The value in the text; overrides, settings and sweeps are looked at where they are written. */
+    @Check
+    public void parameterInItsRange(Parameter parameter) {
+        if (parameter.getRange() == null || !sound(parameter)) {
+            return;
+        }
+        try {
+            Evaluator evaluator = new Evaluator(Environment.ofText());
+            Value.RangeValue range = (Value.RangeValue) evaluator.evaluate(parameter.getRange());
+            if (range.upper() < range.lower()) {
+                report(
+                        IssueCode.EMPTY_RANGE,
+                        parameter,
+                        IsthmusPackage.Literals.PARAMETER__RANGE,
+                        "The range of parameter '" + parameter.getName() + "' runs backwards; exchange its ends.");
+            } else {
+                ParameterRange.of(parameter, evaluator)
+                        .violation(evaluator.real(parameter.getValue()))
+                        .ifPresent(text ->
+                                report(IssueCode.OUT_OF_RANGE, parameter, IsthmusPackage.Literals.PARAMETER__VALUE, text));
+            }
+        } catch (EvaluationFailure failure) {
+            if (EcoreUtil2.getRootContainer(failure.place()) == EcoreUtil2.getRootContainer(parameter)) {
+                report(failure.code(), failure.place(), null, failure.getMessage());
+            }
+        }
+    }
+}
