@@ -4,12 +4,7 @@ import java.util.HashSet;
 import java.util.List;
 import java.util.Set;
 import org.eclipse.emf.ecore.EObject;
-import org.eclipse.xtext.EcoreUtil2;
 import org.eclipse.xtext.validation.Check;
-import org.isthmus.language.evaluation.Environment;
-import org.isthmus.language.evaluation.EvaluationFailure;
-import org.isthmus.language.evaluation.Evaluator;
-import org.isthmus.language.evaluation.Value;
 import org.isthmus.language.findings.IssueCode;
 import org.isthmus.language.isthmus.Across;
 import org.isthmus.language.isthmus.Argument;
@@ -21,7 +16,6 @@ import org.isthmus.language.isthmus.LatticeDeclaration;
 import org.isthmus.language.isthmus.LatticeUse;
 import org.isthmus.language.isthmus.LeadDeclaration;
 import org.isthmus.language.isthmus.LeadSetting;
-import org.isthmus.language.isthmus.Parameter;
 import org.isthmus.language.isthmus.Setting;
 import org.isthmus.language.isthmus.SiteDeclaration;
 import org.isthmus.language.isthmus.VectorDeclaration;
@@ -181,33 +175,5 @@ public class StructureChecks extends ConcernChecks {
                 report(IssueCode.DUPLICATE_NAME, setting, null, "This is given a second time in the dephasing; remove one.");
             }
         });
-    }
-
-    /** The value in the text; overrides, settings and sweeps are looked at where they are written. */
-    @Check
-    public void parameterInItsRange(Parameter parameter) {
-        if (parameter.getRange() == null || !sound(parameter)) {
-            return;
-        }
-        try {
-            Evaluator evaluator = new Evaluator(Environment.ofText());
-            Value.RangeValue range = (Value.RangeValue) evaluator.evaluate(parameter.getRange());
-            if (range.upper() < range.lower()) {
-                report(
-                        IssueCode.EMPTY_RANGE,
-                        parameter,
-                        IsthmusPackage.Literals.PARAMETER__RANGE,
-                        "The range of parameter '" + parameter.getName() + "' runs backwards; exchange its ends.");
-            } else {
-                ParameterRange.of(parameter, evaluator)
-                        .violation(evaluator.real(parameter.getValue()))
-                        .ifPresent(text ->
-                                report(IssueCode.OUT_OF_RANGE, parameter, IsthmusPackage.Literals.PARAMETER__VALUE, text));
-            }
-        } catch (EvaluationFailure failure) {
-            if (EcoreUtil2.getRootContainer(failure.place()) == EcoreUtil2.getRootContainer(parameter)) {
-                report(failure.code(), failure.place(), null, failure.getMessage());
-            }
-        }
     }
 }
