@@ -125,11 +125,17 @@ public class DeviceChecks extends ConcernChecks {
             Elaborated at = elaborated(device, values);
             for (Finding finding : at.findings()) {
                 boolean news = finding.severity() != Severity.INFORMATION
-                        && known.stream().noneMatch(k -> k.code().equals(finding.code()) && k.place().equals(finding.place()));
+                        && known.stream()
+                                .noneMatch(k -> k.code().equals(finding.code())
+                                        && k.place().equals(finding.place()));
                 if (news) {
                     known.add(finding);
                     report(
-                            new Finding(finding.code(), finding.severity(), finding.text() + told(values), Places.of(declaration, null)),
+                            new Finding(
+                                    finding.code(),
+                                    finding.severity(),
+                                    finding.text() + told(values),
+                                    Places.of(declaration, null)),
                             declaration,
                             IsthmusPackage.Literals.DECLARATION__NAME);
                 }
@@ -164,7 +170,10 @@ public class DeviceChecks extends ConcernChecks {
             return "";
         }
         StringBuilder text = new StringBuilder(" (with ");
-        values.forEach((name, value) -> text.append(text.length() > 7 ? ", " : "").append(name).append(" = ").append(value));
+        values.forEach((name, value) -> text.append(text.length() > 7 ? ", " : "")
+                .append(name)
+                .append(" = ")
+                .append(value));
         return text.append(")").toString();
     }
 
@@ -195,13 +204,16 @@ public class DeviceChecks extends ConcernChecks {
         for (MeasurementStatement statement : declaration.getStatements()) {
             Parameter parameter = statement instanceof SweepAxis sweep
                     ? sweep.getParameter()
-                    : statement instanceof MeasurementSetting setting && setting.getTarget() instanceof Parameter p ? p : null;
+                    : statement instanceof MeasurementSetting setting && setting.getTarget() instanceof Parameter p
+                            ? p
+                            : null;
             if (parameter == null || parameter.getRange() == null) {
                 continue;
             }
             List<Double> values = statement instanceof SweepAxis
                     ? measurement.axes().stream()
-                            .filter(a -> a instanceof Measurement.SweepAxis s && s.parameter().equals(parameter.getName()))
+                            .filter(a -> a instanceof Measurement.SweepAxis s
+                                    && s.parameter().equals(parameter.getName()))
                             .findFirst()
                             .map(Measurement.Axis::values)
                             .orElse(List.of())
@@ -210,7 +222,11 @@ public class DeviceChecks extends ConcernChecks {
                 ParameterRange range = ParameterRange.of(parameter, evaluator);
                 for (double value : values) {
                     if (range.violation(value).isPresent()) {
-                        report(IssueCode.OUT_OF_RANGE, statement, null, range.violation(value).get());
+                        report(
+                                IssueCode.OUT_OF_RANGE,
+                                statement,
+                                null,
+                                range.violation(value).get());
                         found = true;
                         break;
                     }
@@ -230,11 +246,14 @@ public class DeviceChecks extends ConcernChecks {
         }
         String energies = measurement.energy() instanceof Measurement.EnergyPoints axis
                 ? axis.values().size() + " energies each"
-                : measurement.energy() instanceof Measurement.AdaptiveEnergies ? "energies as the tolerance asks" : "integrals over energy where needed";
+                : measurement.energy() instanceof Measurement.AdaptiveEnergies
+                        ? "energies as the tolerance asks"
+                        : "integrals over energy where needed";
         report(
                 IssueCode.SOLVE_COUNT,
                 declaration,
                 IsthmusPackage.Literals.DECLARATION__NAME,
-                "Measurement '" + declaration.getName() + "' has " + points + (points == 1 ? " point" : " points") + ", " + energies + ".");
+                "Measurement '" + declaration.getName() + "' has " + points + (points == 1 ? " point" : " points")
+                        + ", " + energies + ".");
     }
 }

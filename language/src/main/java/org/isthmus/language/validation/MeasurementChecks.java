@@ -34,7 +34,7 @@ import org.isthmus.runtime.catalogue.ObservableEntry;
 /** What a measurement asks, as far as the text alone shows it. */
 public class MeasurementChecks extends ConcernChecks {
     private static final Set<String> FLOWS =
-            Set.of("current", "conductance", "noise", "fano", "seebeck", "heatCurrent", "transmission", "resistance");
+            Set.of("current", "conductance", "noise", "fano", "seebeck", "heatCurrent", "resistance");
     private static final Set<String> NEVER_NEGATIVE =
             Set.of("transmission", "dos", "ldos", "density", "modes", "occupation", "residual", "conductance");
 
@@ -51,11 +51,16 @@ public class MeasurementChecks extends ConcernChecks {
                 key = "value " + sweep.getParameter().getName();
                 word = "A value of '" + sweep.getParameter().getName() + "'";
             } else if (statement instanceof MeasurementSetting setting && linked(setting.getTarget())) {
-                key = (setting.getTarget() instanceof Parameter ? "value " : "setting ") + setting.getTarget().getName();
+                key = (setting.getTarget() instanceof Parameter ? "value " : "setting ")
+                        + setting.getTarget().getName();
                 word = "A value of '" + setting.getTarget().getName() + "'";
             }
             if (key != null && !seen.add(key)) {
-                report(IssueCode.DUPLICATE_NAME, statement, null, word + " is given a second time in this measurement; remove one.");
+                report(
+                        IssueCode.DUPLICATE_NAME,
+                        statement,
+                        null,
+                        word + " is given a second time in this measurement; remove one.");
             }
         }
     }
@@ -69,12 +74,14 @@ public class MeasurementChecks extends ConcernChecks {
         MeasurementDeclaration measurement = (MeasurementDeclaration) average.eContainer();
         if (linked(average.getParameter())
                 && measurement.getStatements().stream()
-                        .noneMatch(s -> s instanceof SweepAxis sweep && sweep.getParameter() == average.getParameter())) {
+                        .noneMatch(
+                                s -> s instanceof SweepAxis sweep && sweep.getParameter() == average.getParameter())) {
             report(
                     IssueCode.AVERAGE_WITHOUT_SWEEP,
                     average,
                     IsthmusPackage.Literals.AVERAGE__PARAMETER,
-                    "'" + average.getParameter().getName() + "' is not swept here, so there is nothing to average over; add 'sweep "
+                    "'" + average.getParameter().getName()
+                            + "' is not swept here, so there is nothing to average over; add 'sweep "
                             + average.getParameter().getName() + " = …;'.");
         }
     }
@@ -86,7 +93,8 @@ public class MeasurementChecks extends ConcernChecks {
                     IssueCode.FLOATING_WITH_MU,
                     bias,
                     IsthmusPackage.Literals.BIAS_AXIS__LEAD,
-                    "Lead '" + bias.getLead().getName() + "' is floating: its potential is found, so no bias can be given.");
+                    "Lead '" + bias.getLead().getName()
+                            + "' is floating: its potential is found, so no bias can be given.");
         }
     }
 
@@ -96,7 +104,9 @@ public class MeasurementChecks extends ConcernChecks {
 
     @Check
     public void drop(MeasurementSetting setting) {
-        if (!(setting.getTarget() instanceof CatalogueEntry entry) || !"drop".equals(entry.getName()) || setting.getPoints() == null) {
+        if (!(setting.getTarget() instanceof CatalogueEntry entry)
+                || !"drop".equals(entry.getName())
+                || setting.getPoints() == null) {
             return;
         }
         if (!(setting.getPoints().getValues() instanceof Reference word) || !linked(word.getTarget())) {
@@ -123,7 +133,9 @@ public class MeasurementChecks extends ConcernChecks {
     }
 
     private static long given(DeviceDeclaration device) {
-        return DeviceStructure.of(device).leads().stream().filter(l -> !floating(l)).count();
+        return DeviceStructure.of(device).leads().stream()
+                .filter(l -> !floating(l))
+                .count();
     }
 
     @Check
@@ -140,12 +152,14 @@ public class MeasurementChecks extends ConcernChecks {
             if (observable == null) {
                 continue;
             }
-            if (!observable.available() || reference.getArguments().size() > observable.arguments().mostLeads()) {
+            if (!observable.available()
+                    || reference.getArguments().size() > observable.arguments().mostLeads()) {
                 report(
                         IssueCode.NOT_SOLVED_YET,
                         reference,
                         IsthmusPackage.Literals.REFERENCE__TARGET,
-                        "'" + observable.name() + (observable.available() ? "' with a matrix" : "'") + " is not solved yet.");
+                        "'" + observable.name() + (observable.available() ? "' with a matrix" : "'")
+                                + " is not solved yet.");
             } else if (FLOWS.contains(observable.name()) && given(measurement.getDevice()) < 2 && !told) {
                 told = true;
                 report(
@@ -161,7 +175,8 @@ public class MeasurementChecks extends ConcernChecks {
                         IssueCode.MISSING_AXIS,
                         reference,
                         IsthmusPackage.Literals.REFERENCE__TARGET,
-                        "'" + observable.name() + "' has a value per energy, but this measurement has no energy axis; add"
+                        "'" + observable.name()
+                                + "' has a value per energy, but this measurement has no energy axis; add"
                                 + " 'energy = … in N points;' or pick one with 'at'.");
             }
         }
@@ -217,7 +232,8 @@ public class MeasurementChecks extends ConcernChecks {
         if (entry.getName().equals("abs")) {
             return true;
         }
-        boolean reduction = List.of("min", "max", "mean").contains(entry.getName()) && reference.getArguments().size() == 1;
+        boolean reduction = List.of("min", "max", "mean").contains(entry.getName())
+                && reference.getArguments().size() == 1;
         return reduction ? neverNegative(reference.getArguments().get(0)) : NEVER_NEGATIVE.contains(entry.getName());
     }
 

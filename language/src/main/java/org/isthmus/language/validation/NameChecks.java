@@ -87,7 +87,8 @@ public class NameChecks extends ConcernChecks {
                 IssueCode.DUPLICATE_NAME,
                 declaration,
                 IsthmusPackage.Literals.DECLARATION__NAME,
-                "'" + declaration.getName() + "' is declared a second time in " + where + "; rename or remove one of them.");
+                "'" + declaration.getName() + "' is declared a second time in " + where
+                        + "; rename or remove one of them.");
     }
 
     /** Two files of one namespace share a scope; files without a namespace are each their own. */
@@ -99,21 +100,25 @@ public class NameChecks extends ConcernChecks {
         IResourceDescription own = resourceDescriptions.getResourceDescription(file.eResource());
         for (FileMember member : file.getDeclarations()) {
             Declaration declaration = (Declaration) member;
-            QualifiedName name = member instanceof MeasurementDeclaration ? null : names.getFullyQualifiedName(declaration);
+            QualifiedName name =
+                    member instanceof MeasurementDeclaration ? null : names.getFullyQualifiedName(declaration);
             if (name == null) {
                 continue;
             }
-            for (IContainer container : containers.getVisibleContainers(
-                    own, descriptions.getResourceDescriptions(file.eResource()))) {
+            for (IContainer container :
+                    containers.getVisibleContainers(own, descriptions.getResourceDescriptions(file.eResource()))) {
                 for (IEObjectDescription other :
                         container.getExportedObjects(IsthmusPackage.Literals.DECLARATION, name, false)) {
-                    if (!other.getEObjectURI().trimFragment().equals(file.eResource().getURI())
+                    if (!other.getEObjectURI()
+                                    .trimFragment()
+                                    .equals(file.eResource().getURI())
                             && other.getEClass() != IsthmusPackage.Literals.MEASUREMENT_DECLARATION) {
                         report(
                                 IssueCode.DUPLICATE_NAME,
                                 declaration,
                                 IsthmusPackage.Literals.DECLARATION__NAME,
-                                "'" + name + "' is declared in " + other.getEObjectURI().trimFragment().lastSegment()
+                                "'" + name + "' is declared in "
+                                        + other.getEObjectURI().trimFragment().lastSegment()
                                         + " too; rename one of them, or give the files different namespaces.");
                         return;
                     }
@@ -163,7 +168,9 @@ public class NameChecks extends ConcernChecks {
         Set<String> own = new HashSet<>();
         Set<String> removed = new HashSet<>();
         for (DeviceMember member : device.getMembers()) {
-            if (member instanceof Removal removal && removal.getMember() != null && !removal.getMember().eIsProxy()) {
+            if (member instanceof Removal removal
+                    && removal.getMember() != null
+                    && !removal.getMember().eIsProxy()) {
                 removed.add(removal.getKind() + " " + removal.getMember().getName());
             }
             String key = key(member);
@@ -209,7 +216,8 @@ public class NameChecks extends ConcernChecks {
                         IssueCode.DUPLICATE_NAME,
                         override,
                         IsthmusPackage.Literals.PARAMETER_OVERRIDE__PARAMETER,
-                        "'" + override.getParameter().getName() + "' is overridden a second time in this device; remove one.");
+                        "'" + override.getParameter().getName()
+                                + "' is overridden a second time in this device; remove one.");
             }
         }
     }
@@ -219,7 +227,9 @@ public class NameChecks extends ConcernChecks {
     public void replacesNothing(Replacement replacement) {
         NamedMember member = replacement.getMember();
         DeviceDeclaration device = EcoreUtil2.getContainerOfType(replacement, DeviceDeclaration.class);
-        if (member == null || member.getName() == null || device.getBase() != null && device.getBase().eIsProxy()) {
+        if (member == null
+                || member.getName() == null
+                || device.getBase() != null && device.getBase().eIsProxy()) {
             return;
         }
         List<NamedMember> known = device.getBase() == null
@@ -242,12 +252,15 @@ public class NameChecks extends ConcernChecks {
     @Check
     public void hidesAUnit(Declaration declaration) {
         boolean value = declaration instanceof Constant || declaration instanceof Parameter;
-        if (value && declaration.getName() != null && Units.bySymbol(declaration.getName()).isPresent()) {
+        if (value
+                && declaration.getName() != null
+                && Units.bySymbol(declaration.getName()).isPresent()) {
             report(
                     IssueCode.HIDES_UNIT,
                     declaration,
                     IsthmusPackage.Literals.DECLARATION__NAME,
-                    "'" + declaration.getName() + "' hides the unit " + Units.bySymbol(declaration.getName()).get().name()
+                    "'" + declaration.getName() + "' hides the unit "
+                            + Units.bySymbol(declaration.getName()).get().name()
                             + " where it stands alone; directly after a number it is still the unit.");
         }
     }
@@ -258,13 +271,22 @@ public class NameChecks extends ConcernChecks {
             return;
         }
         DeviceDeclaration device = EcoreUtil2.getContainerOfType(parameter, DeviceDeclaration.class);
-        for (Resource resource : new ArrayList<>(parameter.eResource().getResourceSet().getResources())) {
+        boolean twice = device.getMembers().stream()
+                .anyMatch(m -> m != parameter
+                        && m instanceof Parameter other
+                        && parameter.getName().equals(other.getName()));
+        if (twice) {
+            return;
+        }
+        for (Resource resource :
+                new ArrayList<>(parameter.eResource().getResourceSet().getResources())) {
             if (resource.getContents().isEmpty()
                     || !(resource.getContents().get(0) instanceof SourceFile)
                     || BuiltIns.contains(resource.getURI())) {
                 continue;
             }
-            for (Reference reference : EcoreUtil2.getAllContentsOfType(resource.getContents().get(0), Reference.class)) {
+            for (Reference reference :
+                    EcoreUtil2.getAllContentsOfType(resource.getContents().get(0), Reference.class)) {
                 if (reference.getTarget() == parameter) {
                     return;
                 }
@@ -294,7 +316,8 @@ public class NameChecks extends ConcernChecks {
                     IssueCode.CYCLE,
                     device,
                     IsthmusPackage.Literals.DEVICE_DECLARATION__BASE,
-                    String.join(" extends ", path) + " extends '" + device.getName() + "' again: a family needs a first device.");
+                    String.join(" extends ", path) + " extends '" + device.getName()
+                            + "' again: a family needs a first device.");
         }
     }
 
@@ -342,7 +365,8 @@ public class NameChecks extends ConcernChecks {
 
     private static List<SourceFile> filesOf(Import statement, SourceFile from) {
         List<SourceFile> files = new ArrayList<>();
-        for (Resource resource : new ArrayList<>(from.eResource().getResourceSet().getResources())) {
+        for (Resource resource :
+                new ArrayList<>(from.eResource().getResourceSet().getResources())) {
             if (!resource.getContents().isEmpty()
                     && resource.getContents().get(0) instanceof SourceFile file
                     && file.getName() != null
@@ -361,7 +385,8 @@ public class NameChecks extends ConcernChecks {
             return;
         }
         List<String> known = new ArrayList<>();
-        for (Resource resource : new ArrayList<>(file.eResource().getResourceSet().getResources())) {
+        for (Resource resource :
+                new ArrayList<>(file.eResource().getResourceSet().getResources())) {
             for (EObject root : resource.getContents()) {
                 if (root instanceof SourceFile other && other.getName() != null) {
                     known.add(other.getName());

@@ -15,9 +15,8 @@ record ParameterRange(String name, double lower, double upper, Unit unit) {
     private static final double ROUNDING = 1e-12;
 
     static ParameterRange of(Parameter parameter, Evaluator evaluator) {
-        Dimension dimension = new Inference().typeOf(parameter) instanceof Type.Scalar scalar
-                ? scalar.dimension()
-                : Dimension.NUMBER;
+        Dimension dimension =
+                new Inference().typeOf(parameter) instanceof Type.Scalar scalar ? scalar.dimension() : Dimension.NUMBER;
         Unit unit = Units.fitting(dimension);
         if (parameter.getRange() != null
                 && evaluator.evaluate(parameter.getRange()) instanceof Value.RangeValue range) {
@@ -29,7 +28,8 @@ record ParameterRange(String name, double lower, double upper, Unit unit) {
     /** The sentence for a value outside; empty for one inside. */
     Optional<String> violation(double value) {
         double slack = ROUNDING * Math.max(Math.abs(lower), Math.abs(upper));
-        if (value >= lower - (Double.isFinite(slack) ? slack : 0) && value <= upper + (Double.isFinite(slack) ? slack : 0)) {
+        if (value >= lower - (Double.isFinite(slack) ? slack : 0)
+                && value <= upper + (Double.isFinite(slack) ? slack : 0)) {
             return Optional.empty();
         }
         return Optional.of("Parameter '" + name + "' must lie from " + told(lower) + " to " + told(upper) + ", but is "

@@ -10,7 +10,6 @@ import org.isthmus.language.isthmus.Across;
 import org.isthmus.language.isthmus.Argument;
 import org.isthmus.language.isthmus.DephasingDeclaration;
 import org.isthmus.language.isthmus.DeviceDeclaration;
-import org.isthmus.language.isthmus.Floating;
 import org.isthmus.language.isthmus.IsthmusPackage;
 import org.isthmus.language.isthmus.LatticeDeclaration;
 import org.isthmus.language.isthmus.LatticeUse;
@@ -27,7 +26,9 @@ import org.isthmus.runtime.device.Side;
 public class StructureChecks extends ConcernChecks {
     @Check
     public void latticeIsComplete(LatticeDeclaration lattice) {
-        long vectors = lattice.getMembers().stream().filter(VectorDeclaration.class::isInstance).count();
+        long vectors = lattice.getMembers().stream()
+                .filter(VectorDeclaration.class::isInstance)
+                .count();
         boolean sites = lattice.getMembers().stream().anyMatch(SiteDeclaration.class::isInstance);
         if (vectors == 0 || vectors > 3 || !sites) {
             report(
@@ -35,13 +36,15 @@ public class StructureChecks extends ConcernChecks {
                     lattice,
                     IsthmusPackage.Literals.DECLARATION__NAME,
                     "Lattice '" + lattice.getName() + "' has " + vectors + " vectors and "
-                            + (sites ? "its sites" : "no site") + "; it needs one to three vectors and at least one site.");
+                            + (sites ? "its sites" : "no site")
+                            + "; it needs one to three vectors and at least one site.");
         }
     }
 
     @Check
     public void deviceIsComplete(DeviceDeclaration device) {
-        if (DeviceStructure.chain(device).stream().anyMatch(d -> d.getBase() != null && d.getBase().eIsProxy())) {
+        if (DeviceStructure.chain(device).stream()
+                .anyMatch(d -> d.getBase() != null && d.getBase().eIsProxy())) {
             return;
         }
         DeviceStructure structure = DeviceStructure.of(device);
@@ -52,7 +55,8 @@ public class StructureChecks extends ConcernChecks {
                     IssueCode.INCOMPLETE_DEVICE,
                     device,
                     IsthmusPackage.Literals.DECLARATION__NAME,
-                    "Device '" + device.getName() + "' has no " + (lattice ? "body" : body ? "lattice" : "lattice and no body")
+                    "Device '" + device.getName() + "' has no "
+                            + (lattice ? "body" : body ? "lattice" : "lattice and no body")
                             + "; write 'lattice Chain(a = …);' and 'body box(…);', for example.");
         }
     }
@@ -71,7 +75,9 @@ public class StructureChecks extends ConcernChecks {
     public void argumentGivenTwice(LatticeUse use) {
         Set<EObject> seen = new HashSet<>();
         for (Argument argument : use.getArguments()) {
-            if (argument.getParameter() != null && !argument.getParameter().eIsProxy() && !seen.add(argument.getParameter())) {
+            if (argument.getParameter() != null
+                    && !argument.getParameter().eIsProxy()
+                    && !seen.add(argument.getParameter())) {
                 report(
                         IssueCode.DUPLICATE_NAME,
                         argument,
@@ -89,25 +95,23 @@ public class StructureChecks extends ConcernChecks {
             on(lead);
         }
         Set<String> seen = new HashSet<>();
-        boolean floating = lead.getSettings().stream().anyMatch(Floating.class::isInstance);
         for (LeadSetting setting : lead.getSettings()) {
-            String name = setting instanceof Setting plain ? plain.getName() : setting instanceof Across ? "across" : "floating";
+            String name = setting instanceof Setting plain
+                    ? plain.getName()
+                    : setting instanceof Across ? "across" : "floating";
             if (name != null && !seen.add(name)) {
-                report(IssueCode.DUPLICATE_NAME, setting, null, "'" + name + "' is given a second time in this lead; remove one.");
-            }
-            if (floating && "mu".equals(name)) {
                 report(
-                        IssueCode.FLOATING_WITH_MU,
+                        IssueCode.DUPLICATE_NAME,
                         setting,
                         null,
-                        "Lead '" + lead.getName() + "' is floating: its mu is found such that no current flows, so none can be"
-                                + " given; remove 'mu' or 'floating'.");
+                        "'" + name + "' is given a second time in this lead; remove one.");
             }
         }
     }
 
     private void side(LeadDeclaration lead) {
-        List<String> words = java.util.Arrays.stream(Side.values()).map(Side::word).toList();
+        List<String> words =
+                java.util.Arrays.stream(Side.values()).map(Side::word).toList();
         if (!words.contains(lead.getSide())) {
             report(
                     IssueCode.UNKNOWN_SIDE,
@@ -117,13 +121,15 @@ public class StructureChecks extends ConcernChecks {
                             + "; there are " + String.join(", ", words) + ".");
         }
         for (LeadSetting setting : lead.getSettings()) {
-            if (setting instanceof Setting plain && ("broadening".equals(plain.getName()) || "selfenergy".equals(plain.getName()))) {
+            if (setting instanceof Setting plain
+                    && ("broadening".equals(plain.getName()) || "selfenergy".equals(plain.getName()))) {
                 report(
                         IssueCode.UNKNOWN_SETTING,
                         plain,
                         IsthmusPackage.Literals.SETTING__NAME,
                         "Lead '" + lead.getName() + "' continues the lattice, so its '" + plain.getName()
-                                + "' follows from it; write 'lead " + lead.getName() + " on …' for a contact given by numbers.");
+                                + "' follows from it; write 'lead " + lead.getName()
+                                + " on …' for a contact given by numbers.");
             }
         }
     }
@@ -139,13 +145,6 @@ public class StructureChecks extends ConcernChecks {
                         "'across' picks a part of a side; lead '" + lead.getName() + "' says its sites after 'on'.");
             }
             if (setting instanceof Setting plain) {
-                if ("potential".equals(plain.getName())) {
-                    report(
-                            IssueCode.LEAD_WITHOUT_BANDS,
-                            plain,
-                            IsthmusPackage.Literals.SETTING__NAME,
-                            "Lead '" + lead.getName() + "' is given by numbers and has no bands that a potential could shift; remove it.");
-                }
                 boolean source = "broadening".equals(plain.getName()) || "selfenergy".equals(plain.getName());
                 if (source && given) {
                     report(
@@ -170,9 +169,15 @@ public class StructureChecks extends ConcernChecks {
     public void dephasing(DephasingDeclaration dephasing) {
         Set<String> seen = new HashSet<>();
         dephasing.getSettings().forEach(setting -> {
-            String name = setting instanceof Setting plain ? plain.getName() : setting.eClass().getName();
+            String name = setting instanceof Setting plain
+                    ? plain.getName()
+                    : setting.eClass().getName();
             if (name != null && !seen.add(name)) {
-                report(IssueCode.DUPLICATE_NAME, setting, null, "This is given a second time in the dephasing; remove one.");
+                report(
+                        IssueCode.DUPLICATE_NAME,
+                        setting,
+                        null,
+                        "This is given a second time in the dephasing; remove one.");
             }
         });
     }

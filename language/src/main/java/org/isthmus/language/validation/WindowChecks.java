@@ -87,7 +87,8 @@ final class WindowChecks {
         double highest = Double.NEGATIVE_INFINITY;
         for (Lead lead : device.leads()) {
             double mu = measurement.mu().orElse(lead.mu());
-            double width = THERMAL * PhysicalConstants.KB * measurement.temperature().orElse(lead.temperature());
+            double width =
+                    THERMAL * PhysicalConstants.KB * measurement.temperature().orElse(lead.temperature());
             double least = 0;
             double most = 0;
             for (Measurement.Axis axis : measurement.axes()) {
@@ -139,7 +140,8 @@ final class WindowChecks {
             add(
                     IssueCode.BEYOND_BAND,
                     true,
-                    "The energies reach to " + told(top ? window.highest() : window.lowest()) + ", but the bands of the leads "
+                    "The energies reach to " + told(top ? window.highest() : window.lowest())
+                            + ", but the bands of the leads "
                             + (top ? "end at " + told(bands.highest()) : "begin at " + told(bands.lowest()))
                             + "; beyond them nothing propagates.");
         }
@@ -159,7 +161,8 @@ final class WindowChecks {
                     IssueCode.THERMAL_WINDOW,
                     true,
                     "The energies leave out part of what carries current: the leads' thermal windows reach from "
-                            + told(lowest) + " to " + told(highest) + "; widen the axis, or record the current without one.");
+                            + told(lowest) + " to " + told(highest)
+                            + "; widen the axis, or record the current without one.");
         }
     }
 
@@ -197,7 +200,8 @@ final class WindowChecks {
     /** A lattice whose hopping is made from a mass names ħ. */
     private static boolean standsForContinuum(LatticeDeclaration lattice) {
         return EcoreUtil2.getAllContentsOfType(lattice, Reference.class).stream()
-                .anyMatch(r -> r.getTarget() instanceof CatalogueEntry entry && entry.getName().equals("hbar"));
+                .anyMatch(r -> r.getTarget() instanceof CatalogueEntry entry
+                        && entry.getName().equals("hbar"));
     }
 
     private void add(IssueCode code, boolean axis, String text) {

@@ -53,7 +53,7 @@ public final class Units {
         decimal("Hz", Dimension.FREQUENCY, 1, 1e15, "hertz");
 
         CANONICAL.put(Dimension.NUMBER, new Unit("", Dimension.NUMBER, 1, 1, "number"));
-        for (String symbol : new String[] {"nm", "eV", "fs", "K", "V", "A", "S", "Ohm", "T", "kg", "F", "Hz"}) {
+        for (String symbol : new String[] {"nm", "eV", "fs", "K", "V", "A", "S", "Ohm", "T", "me", "F", "Hz"}) {
             canonical(BY_SYMBOL.get(symbol));
         }
         canonical(new Unit("cm^2/(V*s)", Dimension.MOBILITY, 1e14, 1e15, "mobility"));
