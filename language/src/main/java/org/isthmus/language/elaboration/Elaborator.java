@@ -16,6 +16,7 @@ import org.eclipse.emf.ecore.util.EcoreUtil;
 import org.isthmus.language.evaluation.Environment;
 import org.isthmus.language.evaluation.EvaluationFailure;
 import org.isthmus.language.evaluation.Evaluator;
+import org.isthmus.language.findings.Places;
 import org.isthmus.language.isthmus.DeviceDeclaration;
 import org.isthmus.language.isthmus.LatticeDeclaration;
 import org.isthmus.language.structure.DeviceStructure;
@@ -117,7 +118,7 @@ public final class Elaborator implements DeviceFamily {
                 draft.leads,
                 draft.field,
                 draft.parameters,
-                Place.of(draft.structure.device()));
+                Places.of(draft.structure.device()));
     }
 
     static void stopIf(BooleanSupplier cancelled) {

@@ -6,6 +6,7 @@ import org.eclipse.emf.ecore.EObject;
 import org.eclipse.emf.ecore.EStructuralFeature;
 import org.isthmus.language.evaluation.EvaluationFailure;
 import org.isthmus.language.findings.IssueCode;
+import org.isthmus.language.findings.Places;
 import org.isthmus.language.scoping.BuiltIns;
 import org.isthmus.runtime.device.Finding;
 import org.isthmus.runtime.device.Severity;
@@ -30,7 +31,7 @@ final class Findings {
                 && object.eResource() != null
                 && object.eResource().getURI() != null
                 && BuiltIns.contains(object.eResource().getURI());
-        SourceRef place = ours && standIn != null ? Place.of(standIn) : Place.of(object, feature);
+        SourceRef place = ours && standIn != null ? Places.of(standIn) : Places.of(object, feature);
         boolean known = list.stream()
                 .anyMatch(f -> f.code().equals(code.id()) && f.place().equals(place));
         if (!known) {

@@ -16,6 +16,7 @@ import org.isthmus.language.evaluation.Code.TruthNode;
 import org.isthmus.language.evaluation.Site;
 import org.isthmus.language.evaluation.Value;
 import org.isthmus.language.findings.IssueCode;
+import org.isthmus.language.findings.Places;
 import org.isthmus.language.isthmus.Across;
 import org.isthmus.language.isthmus.IsthmusPackage;
 import org.isthmus.language.isthmus.LeadDeclaration;
@@ -180,7 +181,7 @@ final class SideLead {
                 s.isEmpty() ? HoppingTable.EMPTY : outward(cells, overlaps, s),
                 s.isEmpty() ? HoppingTable.EMPTY : contact(cells, overlaps, s),
                 List.copyOf(touched),
-                Place.of(lead));
+                Places.of(lead));
     }
 
     private boolean shared(LeadCells cells, TreeSet<Integer> touched) {

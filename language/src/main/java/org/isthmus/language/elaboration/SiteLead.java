@@ -9,6 +9,7 @@ import org.isthmus.language.evaluation.Code.RealNode;
 import org.isthmus.language.evaluation.Code.TruthNode;
 import org.isthmus.language.evaluation.Site;
 import org.isthmus.language.findings.IssueCode;
+import org.isthmus.language.findings.Places;
 import org.isthmus.language.isthmus.LeadDeclaration;
 import org.isthmus.language.isthmus.Reference;
 import org.isthmus.language.isthmus.Setting;
@@ -118,7 +119,7 @@ final class SiteLead {
             }
             widths.add(width);
         }
-        return new WideBandLead(lead.getName(), temperature, mu, floating, sites, widths, Place.of(lead));
+        return new WideBandLead(lead.getName(), temperature, mu, floating, sites, widths, Places.of(lead));
     }
 
     private Lead tabulated(double temperature, double mu, boolean floating, List<Integer> sites, Setting setting) {
@@ -161,7 +162,7 @@ final class SiteLead {
                     list(table, 1),
                     list(table, 2),
                     written,
-                    Place.of(lead));
+                    Places.of(lead));
         } catch (TableFailure failure) {
             draft.findings.add(failure.code(), path, failure.getMessage());
             return null;
