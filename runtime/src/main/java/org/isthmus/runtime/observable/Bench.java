@@ -188,7 +188,13 @@ public final class Bench {
      * @param what for the message where the accuracy is not reached
      */
     double[] integral(String what, double lowest, double highest, DoubleFunction<double[]> integrand) {
-        EnergyIntegral.Result result = new EnergyIntegral(this).integrate(breaks(lowest, highest), integrand, accuracy);
+        return integral(what, lowest, highest, 0, integrand);
+    }
+
+    /** The same; {@code floor} is an error that is small enough, whatever the accuracy. */
+    double[] integral(String what, double lowest, double highest, double floor, DoubleFunction<double[]> integrand) {
+        EnergyIntegral.Result result =
+                new EnergyIntegral(this).integrate(breaks(lowest, highest), integrand, accuracy, floor);
         shortfall(what, result.relativeError());
         return result.values();
     }

@@ -104,12 +104,14 @@ public final class ChargeDensity extends Observable {
         return density;
     }
 
+    /** Good to the accuracy in electrons: the terms are of the order of one. */
     private static double[] line(Bench bench, double from, double to, DoubleFunction<double[]> integrand) {
         List<Double> breaks = new ArrayList<>();
         for (int k = 0; k <= PANELS; k++) {
             breaks.add(from + (to - from) * k / PANELS);
         }
-        EnergyIntegral.Result result = EnergyIntegral.alongContour(breaks, integrand, bench.accuracy());
+        EnergyIntegral.Result result =
+                EnergyIntegral.alongContour(breaks, integrand, bench.accuracy(), bench.accuracy());
         bench.shortfall("density", result.relativeError());
         return result.values();
     }

@@ -41,8 +41,8 @@ final class EnergyIntegral {
     }
 
     /** Integrates along any line; nothing is announced. */
-    static Result alongContour(List<Double> breaks, DoubleFunction<double[]> integrand, double accuracy) {
-        return new EnergyIntegral(null).integrate(breaks, integrand, accuracy);
+    static Result alongContour(List<Double> breaks, DoubleFunction<double[]> integrand, double accuracy, double floor) {
+        return new EnergyIntegral(null).integrate(breaks, integrand, accuracy, floor);
     }
 
     /** A value with the error that was reached, relative to the largest component. */
@@ -70,8 +70,10 @@ final class EnergyIntegral {
      *
      * @param breaks ascending, the window's ends among them
      * @param integrand vector at an energy; every energy is announced to the bench before
+     * @param accuracy relative to the integral of the integrand's absolute value
+     * @param floor an error that is small enough, whatever the accuracy: rounding of the integrand cannot be refined away
      */
-    Result integrate(List<Double> breaks, DoubleFunction<double[]> integrand, double accuracy) {
+    Result integrate(List<Double> breaks, DoubleFunction<double[]> integrand, double accuracy, double floor) {
         List<Panel> open = new ArrayList<>();
         for (int k = 0; k + 1 < breaks.size(); k++) {
             if (breaks.get(k + 1) > breaks.get(k)) {
@@ -96,7 +98,7 @@ final class EnergyIntegral {
             for (Done one : done) {
                 boolean refine = false;
                 for (int c = 0; c < total.length; c++) {
-                    double allowed = accuracy * Math.max(total[c], 1e-6 * largest);
+                    double allowed = Math.max(floor, accuracy * Math.max(total[c], 1e-6 * largest));
                     refine |= error[c] > allowed && one.error()[c] > allowed * share(one.panel()) / first;
                 }
                 if (refine && one.panel().depth() < DEEPEST) {
@@ -124,7 +126,7 @@ final class EnergyIntegral {
         double largest = Arrays.stream(size).max().orElse(0);
         double worst = 0;
         for (int c = 0; c < value.length; c++) {
-            worst = Math.max(worst, size[c] == 0 ? 0 : error[c] / Math.max(size[c], 1e-6 * largest));
+            worst = Math.max(worst, error[c] <= floor ? 0 : error[c] / Math.max(size[c], 1e-6 * largest));
         }
         return new Result(value, worst);
     }

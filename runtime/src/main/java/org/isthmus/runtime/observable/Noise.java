@@ -49,13 +49,27 @@ public final class Noise extends Observable {
         if (!(window[1] > window[0])) {
             return new double[n * n];
         }
-        return bench.integral("noise", window[0], window[1], energy -> {
+        return bench.integral("noise", window[0], window[1], rounding(bench), energy -> {
             double[] all = new double[n * n];
             for (int k = 0; k < all.length; k++) {
                 all[k] = density(bench, k / n, k % n, energy);
             }
             return all;
         });
+    }
+
+    /** What 1 − s†s loses to rounding where everything passes, over the energies that carry noise, eV. */
+    private static double rounding(Bench bench) {
+        double low = Double.POSITIVE_INFINITY;
+        double high = Double.NEGATIVE_INFINITY;
+        int waves = 0;
+        for (int p = 0; p < bench.leads(); p++) {
+            double kT = Fermi.kT(bench.lead(p));
+            low = Math.min(low, bench.lead(p).mu() - 2 * kT);
+            high = Math.max(high, bench.lead(p).mu() + 2 * kT);
+            waves += bench.device().leads().get(p).contactSites().size();
+        }
+        return 1e-15 * waves * (high - low);
     }
 
     private static double density(Bench bench, int a, int b, double energy) {
