@@ -49,6 +49,9 @@ public final class ResultFolder {
                 }
                 sync(file);
             }
+            Path arrays = aside.resolve("result.h5");
+            ResultArrays.write(arrays, result, provenance);
+            sync(arrays);
             Map<String, String> texts = new LinkedHashMap<>(others);
             texts.put("result.json", ResultJson.text(result, provenance));
             for (Map.Entry<String, String> text : texts.entrySet()) {

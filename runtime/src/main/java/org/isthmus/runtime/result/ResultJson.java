@@ -74,7 +74,7 @@ public final class ResultJson {
             object.addProperty("text", verdict.text());
             object.addProperty("verdict", verdict.held() ? "held" : "broken");
             object.add("measured", number(verdict.measured()));
-            object.add("expected", number(verdict.expected()));
+            object.add("wanted", number(verdict.expected()));
             object.add("difference", number(verdict.difference()));
             object.addProperty("unit", verdict.unit());
             object.addProperty("at", verdict.at());
