@@ -25,10 +25,10 @@ import org.isthmus.runtime.plan.SolveStep.Eliminate;
  */
 final class Elimination {
     /** Largest element of F_ee⁻¹F_eb that is let pass: its square multiplies rounding errors. */
-    private static final double TOLERATED = 300;
+    private static final double TOLERATED = 100;
 
     /** A level whose coupling to the border exceeds its distance from the energy by this factor is handed on. */
-    private static final double NEAR_LEVEL = 100;
+    private static final double NEAR_LEVEL = 30;
 
     /** A level nearer to the energy than this part of the block's largest level sits on it, to rounding. */
     private static final double ON_LEVEL = 1e-14;

@@ -22,8 +22,6 @@ final class FrontalSolver implements Solver {
     /** A solution whose own equations are fulfilled no better than this is not given out. */
     private static final double TRUSTWORTHY = 1e-5;
 
-    private static final double UNCOUPLED = 1e-9;
-
     private final OperatingPoint point;
     private final SolvePlan plan;
     private final List<Contact> contacts;
@@ -37,6 +35,14 @@ final class FrontalSolver implements Solver {
         this.plan = plan;
         this.contacts = List.copyOf(contacts);
         this.backend = backend;
+        for (Contact contact : contacts) {
+            for (int orbital : contact.orbitals()) {
+                if (Arrays.binarySearch(plan.root().orbitals(), orbital) < 0) {
+                    throw new IllegalArgumentException(
+                            "orbital " + orbital + " is touched by a lead, but eliminated by the plan");
+                }
+            }
+        }
         entries = new Entries(point, plan);
         SiteTable sites = point.device().sites();
         siteOf = new int[sites.orbitalCount()];
@@ -129,10 +135,18 @@ final class FrontalSolver implements Solver {
             matrix.scatterAdd(minus, places[p], places[p]);
             residual = Math.max(residual, sigmas[p].residual());
         }
-        ComplexMatrix green = inverse(matrix, real);
-        ComplexMatrix unit = backend.multiply(matrix, green);
-        unit.addScaled(ComplexMatrix.identity(matrix.rows()), -1);
-        residual = Math.max(residual, matrix.rows() == 0 ? 0 : unit.frobenius() / matrix.rows());
+        ComplexMatrix green;
+        try {
+            ContactGreen solved = ContactGreen.of(matrix, backend);
+            green = solved.green();
+            residual = Math.max(residual, solved.residual());
+        } catch (ArithmeticException | SingularMatrixException e) {
+            throw new SolveFailure(
+                    "At " + real + " eV the equations of device '"
+                            + point.device().name() + "' have no solution (" + e.getMessage()
+                            + "); move the energy a little, away from a band edge or a bound state.",
+                    e);
+        }
         if (!(residual < TRUSTWORTHY) || !green.finite()) {
             throw new SolveFailure("At " + real + " eV the equations of device '"
                     + point.device().name() + "' are fulfilled to " + residual
@@ -153,42 +167,6 @@ final class FrontalSolver implements Solver {
                             + e.getMessage() + ".",
                     e);
         }
-    }
-
-    /** G of what is left; a level that nothing couples to, handed on to here, is left out. */
-    private ComplexMatrix inverse(ComplexMatrix matrix, double energy) {
-        try {
-            return backend.inverse(matrix);
-        } catch (SingularMatrixException e) {
-            int contactOrbitals = plan.root().orbitals().length;
-            int n = matrix.rows();
-            int[] coupled = IntStream.range(0, n)
-                    .filter(i -> i < contactOrbitals || rowSize(matrix, i) > UNCOUPLED)
-                    .toArray();
-            if (coupled.length == n) {
-                throw new SolveFailure(
-                        "A state of device '" + point.device().name() + "' that no lead reaches lies exactly at "
-                                + energy + " eV; move the energy a little.",
-                        e);
-            }
-            ComplexMatrix green = ComplexMatrix.zeros(n, n);
-            green.scatterAdd(inverse(matrix.select(coupled, coupled), energy), coupled, coupled);
-            for (int i = contactOrbitals; i < n; i++) {
-                if (rowSize(matrix, i) <= UNCOUPLED) {
-                    matrix.set(i, i, 1, 0);
-                    green.set(i, i, 1, 0);
-                }
-            }
-            return green;
-        }
-    }
-
-    private static double rowSize(ComplexMatrix matrix, int row) {
-        double size = 0;
-        for (int j = 0; j < matrix.columns(); j++) {
-            size = Math.max(size, Math.hypot(matrix.real(row, j), matrix.imaginary(row, j)));
-        }
-        return size;
     }
 
     @Override

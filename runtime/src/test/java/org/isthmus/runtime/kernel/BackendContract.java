@@ -172,4 +172,49 @@ public abstract class BackendContract {
             }
         }
     }
+
+    /** Against the same by products and inverses; in real arithmetic too where the back end has it. */
+    @Test
+    void eliminationLeavesTheSchurComplement() {
+        Random random = new Random(21);
+        for (boolean real : backend().realArithmetic() ? new boolean[] {false, true} : new boolean[] {false}) {
+            for (int n : SIZES) {
+                for (int count : new int[] {0, 1, n / 2, n}) {
+                    ComplexMatrix a = random(random, n, n);
+                    if (real) {
+                        a = Dense.realPart(a).complex();
+                    }
+                    Dense whole = real ? Dense.realPart(a) : Dense.of(a.copy());
+                    Reduction reduction = backend().eliminate(whole, count);
+                    Dense parts = Dense.of(a);
+                    ComplexMatrix inverse =
+                            backend().inverse(parts.block(0, count, 0, count).complex());
+                    ComplexMatrix above = parts.block(0, count, count, n).complex();
+                    ComplexMatrix below = parts.block(count, n, 0, count).complex();
+                    ComplexMatrix right = backend().multiply(inverse, above);
+                    ComplexMatrix complement =
+                            parts.block(count, n, count, n).complex().copy();
+                    backend().multiplyAdd(-1, Op.NONE, below, Op.NONE, right, complement);
+                    double tolerance = 1e-10;
+                    assertEquals(0, distance(inverse, reduction.inverse().complex()), tolerance);
+                    assertEquals(0, distance(right, reduction.right().complex()), tolerance);
+                    assertEquals(
+                            0,
+                            distance(
+                                    backend().multiply(below, inverse),
+                                    reduction.left().complex()),
+                            tolerance);
+                    assertEquals(0, distance(complement, reduction.complement().complex()), tolerance);
+                    assertEquals(real, reduction.complement().real());
+                    assertEquals(
+                            Dense.of(right).largest(), reduction.amplification(), tolerance * (1 + right.frobenius()));
+                }
+            }
+        }
+    }
+
+    @Test
+    void eliminationTellsASingularBlock() {
+        assertThrows(SingularMatrixException.class, () -> backend().eliminate(Dense.zeros(4, 4, false), 2));
+    }
 }
