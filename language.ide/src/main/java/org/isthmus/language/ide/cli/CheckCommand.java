@@ -41,7 +41,7 @@ final class CheckCommand implements Callable<Integer> {
     @Override
     public Integer call() {
         Project project;
-        Pipeline pipeline = new Pipeline();
+        Pipeline pipeline = new Pipeline(VersionText.full());
         try {
             project = pipeline.load(paths);
         } catch (MissingInput e) {

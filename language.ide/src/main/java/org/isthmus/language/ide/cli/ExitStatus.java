@@ -10,5 +10,8 @@ final class ExitStatus {
     /** The run itself failed. */
     static final int FAILED = 3;
 
+    /** Stopped by Ctrl-C: 128 and the number of the signal, as shells have it. */
+    static final int INTERRUPTED = 130;
+
     private ExitStatus() {}
 }

@@ -38,7 +38,7 @@ final class FormatCommand implements Callable<Integer> {
     @Override
     public Integer call() throws IOException {
         PrintWriter out = spec.commandLine().getOut();
-        Pipeline pipeline = new Pipeline();
+        Pipeline pipeline = new Pipeline(VersionText.full());
         Project project;
         try {
             project = pipeline.load(paths);

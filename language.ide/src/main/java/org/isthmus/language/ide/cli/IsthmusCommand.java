@@ -9,7 +9,7 @@ import picocli.CommandLine.Spec;
 @Command(
         name = "isthmus",
         description = "Checks, describes and runs quantum-transport models written in the Isthmus language.",
-        subcommands = {CheckCommand.class, FormatCommand.class},
+        subcommands = {CheckCommand.class, RunCommand.class, DescribeCommand.class, FormatCommand.class},
         mixinStandardHelpOptions = true,
         versionProvider = VersionText.class,
         synopsisSubcommandLabel = "COMMAND",

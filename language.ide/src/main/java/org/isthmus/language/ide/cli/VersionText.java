@@ -19,8 +19,13 @@ final class VersionText implements IVersionProvider {
         }
     }
 
+    /** Such as {@code isthmus 0.1.0}. */
+    static String full() {
+        return "isthmus " + number();
+    }
+
     @Override
     public String[] getVersion() {
-        return new String[] {"isthmus " + number()};
+        return new String[] {full()};
     }
 }

@@ -73,6 +73,11 @@ public final class Project {
                 .orElseThrow();
     }
 
+    /** A path as the user gave it. */
+    String shown(java.nio.file.Path path) {
+        return shown.computeIfAbsent(path.toString(), p -> ProjectFiles.shownFromHere(java.nio.file.Path.of(p)));
+    }
+
     /** The same finding with its file named as the user gave it. */
     Finding shown(Finding finding) {
         SourceRef place = finding.place();

@@ -88,7 +88,8 @@ public record ProjectFiles(Optional<Path> given, List<SourceFile> asked, List<So
         return own;
     }
 
-    private static String shownFromHere(Path file) {
+    /** A path that nobody gave, as somebody in the present folder would. */
+    static String shownFromHere(Path file) {
         Path here = Path.of("").toAbsolutePath();
         return file.startsWith(here) ? here.relativize(file).toString() : file.toString();
     }
