@@ -124,6 +124,8 @@ public final class MeasurementLowering {
                 averages.add(average.getParameter().getName());
             }
         }
+        // in tables the sweeps come first, then the axis; among themselves sweeps and biases keep their order
+        axes.sort(java.util.Comparator.comparing(axis -> axis instanceof Measurement.BiasAxis));
         Settings values = new Settings();
         attempt(() -> values.energy = energy(evaluator));
         attempt(() -> values.temperature = number("temperature", evaluator));

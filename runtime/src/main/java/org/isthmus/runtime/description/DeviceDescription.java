@@ -62,8 +62,22 @@ public record DeviceDescription(Device device, List<LeadDescription> leads, Solv
                         .orElse(1);
     }
 
-    /** Lines of text, without line ends. */
+    /** All that is known, as lines of text without line ends. */
     public List<String> lines() {
+        List<String> lines = new ArrayList<>(physicalLines());
+        plan.toString().lines().forEach(line -> lines.add("  " + line));
+        lines.add(String.format(
+                Locale.ROOT,
+                "  estimate per energy and core: %s ms at %.0f Gflop/s; %s MiB, with values per site %s MiB",
+                number(plan.flops() / FLOPS_PER_SECOND * 1e3),
+                FLOPS_PER_SECOND / 1e9,
+                number(plan.bytes() / MIB),
+                number(plan.bytesForSites() / MIB)));
+        return lines;
+    }
+
+    /** What does not depend on how it is solved. */
+    public List<String> physicalLines() {
         List<String> lines = new ArrayList<>();
         Lattice lattice = device.lattice();
         SiteTable sites = device.sites();
@@ -88,14 +102,6 @@ public record DeviceDescription(Device device, List<LeadDescription> leads, Solv
         for (LeadDescription lead : leads) {
             lead.lines(spacing).forEach(line -> lines.add("  " + line));
         }
-        plan.toString().lines().forEach(line -> lines.add("  " + line));
-        lines.add(String.format(
-                Locale.ROOT,
-                "  estimate per energy and core: %s ms at %.0f Gflop/s; %s MiB, with values per site %s MiB",
-                number(plan.flops() / FLOPS_PER_SECOND * 1e3),
-                FLOPS_PER_SECOND / 1e9,
-                number(plan.bytes() / MIB),
-                number(plan.bytesForSites() / MIB)));
         return lines;
     }
 

@@ -8,7 +8,7 @@ import java.util.OptionalDouble;
  * What is asked of a device.
  *
  * @param settings values of device parameters for this measurement, internal units
- * @param axes sweeps and biases in the order written, first outermost
+ * @param axes sweeps in the order written, first outermost, then biases
  * @param averages names of swept parameters that the results are averaged over
  * @param temperature overrides every lead's, K
  * @param mu overrides every lead's, eV

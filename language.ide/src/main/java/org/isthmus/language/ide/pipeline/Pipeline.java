@@ -132,7 +132,7 @@ public final class Pipeline {
         Device device = job.family().elaborate(values).device();
         return new Provenance(
                 tool,
-                device == null ? "" : String.join("\n", describe(device).lines()),
+                device == null ? "" : String.join("\n", describe(device).physicalLines()),
                 job.inputs(),
                 job.given(),
                 backend().description(),
