@@ -91,6 +91,7 @@ final class RunCommand implements Callable<Integer> {
                 return ExitStatus.FINDINGS;
             }
             prepared = pipeline.prepare(project, selection, findings);
+            prepared.notes().forEach(note -> err.println("isthmus: " + note));
             prepared.findings().forEach(f -> err.println(FindingWriter.line(f)));
             if (FindingWriter.count(prepared.findings(), Severity.ERROR) > 0) {
                 err.println("isthmus: nothing was run, since the measurements have errors.");

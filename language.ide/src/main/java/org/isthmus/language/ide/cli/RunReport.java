@@ -41,17 +41,11 @@ final class RunReport {
         for (Verdict verdict : result.verdicts()) {
             if (!verdict.held()) {
                 err.println(FindingWriter.line(
-                        new Finding("broken-expectation", Severity.ERROR, verdict.sentence(), place(job, verdict))));
+                        new Finding("broken-expectation", Severity.ERROR, verdict.sentence(), verdict.place())));
             }
         }
         files(result.tables(), folder);
         stdout.flush();
-    }
-
-    private static org.isthmus.runtime.device.SourceRef place(Job job, Verdict verdict) {
-        org.isthmus.runtime.device.SourceRef place = verdict.place();
-        return new org.isthmus.runtime.device.SourceRef(
-                job.file().shown(), place.line(), place.column(), place.offset(), place.length());
     }
 
     private void verdicts(List<Verdict> verdicts) {

@@ -13,6 +13,7 @@ import org.isthmus.runtime.device.Measurement;
  * @param inputs SHA-256 of every file that it may depend on, by the path shown to the user
  * @param given values of parameters from outside the text, as the user wrote them
  * @param findings of the check on its file, warnings and information
+ * @param project that it comes from
  */
 public record Job(
         SourceFile file,
@@ -20,7 +21,8 @@ public record Job(
         Measurement measurement,
         Map<String, String> inputs,
         Map<String, String> given,
-        List<Finding> findings) {
+        List<Finding> findings,
+        Project project) {
     public Job {
         inputs = java.util.Collections.unmodifiableMap(new java.util.LinkedHashMap<>(inputs));
         given = java.util.Collections.unmodifiableMap(new java.util.LinkedHashMap<>(given));

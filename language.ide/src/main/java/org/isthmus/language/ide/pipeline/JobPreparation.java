@@ -8,21 +8,23 @@ import java.util.List;
 import java.util.Map;
 import java.util.Optional;
 import java.util.Set;
+import java.util.stream.Collectors;
 import org.eclipse.emf.ecore.util.EcoreUtil;
 import org.eclipse.xtext.EcoreUtil2;
 import org.isthmus.language.elaboration.Elaborator;
 import org.isthmus.language.isthmus.MeasurementDeclaration;
 import org.isthmus.language.isthmus.Parameter;
+import org.isthmus.language.isthmus.SweepAxis;
 import org.isthmus.language.measurement.MeasurementLowering;
 import org.isthmus.language.structure.DeviceStructure;
 import org.isthmus.runtime.device.Finding;
-import org.isthmus.runtime.device.Measurement;
 
 /** Turns the measurements of checked files into jobs. */
 final class JobPreparation {
     private final Project project;
     private final Selection selection;
     private final Map<String, SettingText> settings = new LinkedHashMap<>();
+    private final List<String> notes = new ArrayList<>();
 
     JobPreparation(Project project, Selection selection, Injector injector) throws BadRequest {
         this.project = project;
@@ -61,14 +63,26 @@ final class JobPreparation {
                                 texts(given),
                                 known.stream()
                                         .filter(f -> f.place().file().equals(file.shown()))
-                                        .toList()));
+                                        .toList(),
+                                project));
+                        if (!given.isEmpty()) {
+                            // the check has looked at the values of the text only
+                            jobs.get(jobs.size() - 1)
+                                    .family()
+                                    .elaborate(lowered.measurement().settings())
+                                    .findings()
+                                    .stream()
+                                    .map(project::shown)
+                                    .filter(f -> !known.contains(f))
+                                    .forEach(findings::add);
+                        }
                     }
                 }
             }
         }
         refuseWhatIsMissing(seen, unused, parameters);
         refuseSameFolder(jobs);
-        return new Pipeline.Prepared(jobs, List.copyOf(findings));
+        return new Pipeline.Prepared(jobs, List.copyOf(findings), notes);
     }
 
     private static List<MeasurementDeclaration> measurements(Project.Part part, SourceFile file) {
@@ -81,10 +95,18 @@ final class JobPreparation {
     private Map<String, Double> given(MeasurementDeclaration declaration, Set<String> unused, Set<String> parameters)
             throws BadRequest {
         Map<String, Double> given = new LinkedHashMap<>();
+        Set<String> swept = declaration.getStatements().stream()
+                .filter(SweepAxis.class::isInstance)
+                .map(statement -> ((SweepAxis) statement).getParameter().getName())
+                .collect(Collectors.toSet());
         for (Parameter parameter : DeviceStructure.of(declaration.getDevice()).parameters()) {
             parameters.add(parameter.getName());
             SettingText setting = settings.get(parameter.getName());
-            if (setting != null) {
+            if (setting != null && swept.contains(parameter.getName())) {
+                unused.remove(parameter.getName());
+                notes.add("--set " + parameter.getName() + " has no effect on " + declaration.getName() + " of "
+                        + declaration.getDevice().getName() + ", which sweeps it.");
+            } else if (setting != null) {
                 given.put(parameter.getName(), setting.valueFor(parameter));
                 unused.remove(parameter.getName());
             }
@@ -129,12 +151,5 @@ final class JobPreparation {
                         + "; run the files one after the other, each with its own --out.");
             }
         }
-    }
-
-    /** True where a parameter that was given from outside is swept by the measurement, which then wins. */
-    static boolean swept(Measurement measurement, String parameter) {
-        return measurement.axes().stream()
-                .anyMatch(axis -> axis instanceof Measurement.SweepAxis sweep
-                        && sweep.parameter().equals(parameter));
     }
 }

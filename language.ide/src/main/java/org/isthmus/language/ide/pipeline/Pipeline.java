@@ -36,6 +36,7 @@ import org.isthmus.runtime.plan.Planner;
 import org.isthmus.runtime.result.MeasurementResult;
 import org.isthmus.runtime.result.Provenance;
 import org.isthmus.runtime.result.ResultFolder;
+import org.isthmus.runtime.result.Verdict;
 
 /** The stages from files to results, in order. One instance serves one request at a time. */
 public final class Pipeline {
@@ -74,11 +75,13 @@ public final class Pipeline {
      * What is to be run.
      *
      * @param findings what was found wrong beyond the check, with the parameters given
+     * @param notes sentences about what of the selection has no effect
      */
-    public record Prepared(List<Job> jobs, List<Finding> findings) {
+    public record Prepared(List<Job> jobs, List<Finding> findings, List<String> notes) {
         public Prepared {
             jobs = List.copyOf(jobs);
             findings = List.copyOf(findings);
+            notes = List.copyOf(notes);
         }
     }
 
@@ -99,12 +102,45 @@ public final class Pipeline {
      * @throws InterruptedException where the calling thread is interrupted: the run is then cancelled
      */
     public MeasurementResult run(Job job, int threads, Progress progress) throws RunFailure, InterruptedException {
-        return new MeasurementRunner(backend(), threads)
-                .run(
-                        job.family(),
-                        job.measurement(),
-                        job.findings(),
-                        (done, total) -> progress.advanced(job.title(), done, total));
+        try {
+            MeasurementResult result = new MeasurementRunner(backend(), threads)
+                    .run(
+                            job.family(),
+                            job.measurement(),
+                            job.findings(),
+                            (done, total) -> progress.advanced(job.title(), done, total));
+            return shown(result, job.project());
+        } catch (RunFailure e) {
+            throw new RunFailure(
+                    e.getMessage(),
+                    e.findings().stream().map(job.project()::shown).toList(),
+                    e.getCause());
+        }
+    }
+
+    /** The same result with its files named as the user gave them. */
+    private static MeasurementResult shown(MeasurementResult result, Project project) {
+        return new MeasurementResult(
+                result.device(),
+                result.measurement(),
+                result.tables(),
+                result.verdicts().stream()
+                        .map(v -> new Verdict(
+                                v.text(),
+                                v.held(),
+                                v.measured(),
+                                v.expected(),
+                                v.difference(),
+                                v.at(),
+                                v.unit(),
+                                project.shown(v.place())))
+                        .toList(),
+                result.findings().stream().map(project::shown).distinct().toList(),
+                result.residual(),
+                result.equationResidual(),
+                result.deviceDigest(),
+                result.solves(),
+                result.seconds());
     }
 
     /**

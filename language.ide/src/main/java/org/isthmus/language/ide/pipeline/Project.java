@@ -1,9 +1,9 @@
 package org.isthmus.language.ide.pipeline;
 
-import java.util.LinkedHashMap;
+import java.nio.file.Path;
 import java.util.List;
 import java.util.Map;
-import java.util.Optional;
+import java.util.concurrent.ConcurrentHashMap;
 import org.eclipse.emf.common.util.URI;
 import org.eclipse.xtext.resource.XtextResource;
 import org.eclipse.xtext.resource.XtextResourceSet;
@@ -22,7 +22,7 @@ public final class Project {
 
     Project(List<Part> parts) {
         this.parts = List.copyOf(parts);
-        shown = new LinkedHashMap<>();
+        shown = new ConcurrentHashMap<>();
         for (Part part : parts) {
             part.others().forEach(file -> shown.put(file.path().toString(), file.shown()));
         }
@@ -74,22 +74,25 @@ public final class Project {
     }
 
     /** A path as the user gave it. */
-    String shown(java.nio.file.Path path) {
-        return shown.computeIfAbsent(path.toString(), p -> ProjectFiles.shownFromHere(java.nio.file.Path.of(p)));
+    String shown(Path path) {
+        return shown.computeIfAbsent(path.toString(), p -> ProjectFiles.shownFromHere(Path.of(p)));
     }
 
     /** The same finding with its file named as the user gave it. */
     Finding shown(Finding finding) {
-        SourceRef place = finding.place();
+        SourceRef place = shown(finding.place());
+        return place == finding.place()
+                ? finding
+                : new Finding(finding.code(), finding.severity(), finding.text(), place);
+    }
+
+    /** The same place with its file named as the user gave it. */
+    SourceRef shown(SourceRef place) {
         String file = place.file();
         String path = file.startsWith("file:") ? URI.createURI(file).toFileString() : file;
-        String name = Optional.ofNullable(shown.get(path)).orElse(path);
+        String name = path.startsWith("/") ? shown(Path.of(path)) : path;
         return name.equals(file)
-                ? finding
-                : new Finding(
-                        finding.code(),
-                        finding.severity(),
-                        finding.text(),
-                        new SourceRef(name, place.line(), place.column(), place.offset(), place.length()));
+                ? place
+                : new SourceRef(name, place.line(), place.column(), place.offset(), place.length());
     }
 }
