@@ -67,7 +67,8 @@ final class JobPreparation {
                                 project));
                         if (!given.isEmpty()) {
                             // the check has looked at the values of the text only
-                            jobs.get(jobs.size() - 1)
+                            jobs
+                                    .get(jobs.size() - 1)
                                     .family()
                                     .elaborate(lowered.measurement().settings())
                                     .findings()
