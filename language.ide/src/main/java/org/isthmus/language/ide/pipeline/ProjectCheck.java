@@ -7,28 +7,16 @@ import java.util.Comparator;
 import java.util.Deque;
 import java.util.LinkedHashSet;
 import java.util.List;
-import java.util.Map;
 import java.util.Set;
 import org.eclipse.emf.common.util.TreeIterator;
 import org.eclipse.emf.ecore.EObject;
 import org.eclipse.emf.ecore.resource.Resource;
 import org.eclipse.emf.ecore.util.EcoreUtil;
-import org.eclipse.xtext.EcoreUtil2;
-import org.eclipse.xtext.diagnostics.Diagnostic;
 import org.eclipse.xtext.diagnostics.Severity;
-import org.eclipse.xtext.resource.XtextResource;
 import org.eclipse.xtext.util.CancelIndicator;
 import org.eclipse.xtext.validation.CheckMode;
 import org.eclipse.xtext.validation.IResourceValidator;
 import org.eclipse.xtext.validation.Issue;
-import org.isthmus.language.elaboration.Elaborator;
-import org.isthmus.language.findings.IssueCode;
-import org.isthmus.language.findings.Places;
-import org.isthmus.language.isthmus.DeviceDeclaration;
-import org.isthmus.language.isthmus.LatticeDeclaration;
-import org.isthmus.language.isthmus.MeasurementDeclaration;
-import org.isthmus.language.measurement.MeasurementLowering;
-import org.isthmus.language.typing.FileTyping;
 import org.isthmus.runtime.device.Finding;
 import org.isthmus.runtime.device.SourceRef;
 
@@ -60,24 +48,9 @@ final class ProjectCheck {
         return List.copyOf(findings);
     }
 
-    /** Findings of one file: its text, and where that has no error its lattices, devices and measurements. */
+    /** Findings of one file. */
     private List<Finding> of(Project.Part part, SourceFile file) {
-        XtextResource resource = part.asked().get(file);
-        List<Finding> findings = validate(resource);
-        if (findings.stream().noneMatch(ProjectCheck::isError)) {
-            for (EObject root : resource.getContents()) {
-                Set<Finding> elaborated = new LinkedHashSet<>();
-                EcoreUtil2.getAllContentsOfType(root, LatticeDeclaration.class)
-                        .forEach(lattice -> elaborated.addAll(Elaborator.check(lattice)));
-                EcoreUtil2.getAllContentsOfType(root, DeviceDeclaration.class)
-                        .forEach(device -> elaborated.addAll(
-                                Elaborator.of(device).elaborate(Map.of()).findings()));
-                EcoreUtil2.getAllContentsOfType(root, MeasurementDeclaration.class)
-                        .forEach(measurement -> elaborated.addAll(
-                                MeasurementLowering.lower(measurement, Map.of()).findings()));
-                elaborated.stream().map(project::shown).forEach(findings::add);
-            }
-        }
+        List<Finding> findings = validate(part.asked().get(file));
         findings.sort(Comparator.comparing((Finding f) -> f.place().file())
                 .thenComparingInt(f -> f.place().offset()));
         return findings;
@@ -97,16 +70,8 @@ final class ProjectCheck {
                     orZero(issue.getColumn()),
                     orZero(issue.getOffset()),
                     orZero(issue.getLength()));
-            findings.add(
-                    project.shown(new Finding(code(issue), severity(issue.getSeverity()), issue.getMessage(), place)));
-        }
-        if (findings.stream().noneMatch(ProjectCheck::isError)) {
-            for (EObject root : resource.getContents()) {
-                FileTyping.problems((org.isthmus.language.isthmus.SourceFile) root).stream()
-                        .map(p -> Places.finding(p.code(), p.object(), p.feature(), p.message()))
-                        .map(project::shown)
-                        .forEach(findings::add);
-            }
+            findings.add(project.shown(
+                    new Finding(issue.getCode(), severity(issue.getSeverity()), issue.getMessage(), place)));
         }
         return findings;
     }
@@ -130,14 +95,6 @@ final class ProjectCheck {
         }
         seen.removeAll(part.asked().values());
         return seen;
-    }
-
-    /** The platform's own codes are long names of classes. */
-    private static String code(Issue issue) {
-        if (Diagnostic.SYNTAX_DIAGNOSTIC.equals(issue.getCode())) {
-            return IssueCode.SYNTAX.id();
-        }
-        return Diagnostic.LINKING_DIAGNOSTIC.equals(issue.getCode()) ? IssueCode.UNKNOWN_NAME.id() : issue.getCode();
     }
 
     private static int orZero(Integer number) {
