@@ -99,8 +99,9 @@ final class Blocks {
                 findings.add(
                         IssueCode.MATRIX_SIZE,
                         place,
-                        what + " joins " + rows + " and " + columns + " orbitals: it needs a matrix of " + rows
-                                + " rows and " + columns + " columns, not a number.");
+                        what + " joins " + rows + " and " + columns + " orbitals: it needs a matrix of "
+                                + Told.count(rows, "row") + " and " + Told.count(columns, "column")
+                                + ", not a number.");
                 return null;
             }
             block = identity(rows, number.getReal(), number.getImaginary());
@@ -139,7 +140,8 @@ final class Blocks {
             findings.add(
                     IssueCode.MATRIX_SIZE,
                     list,
-                    what + " needs a matrix of " + rows + " rows and " + columns + " columns.");
+                    what + " needs a matrix of " + Told.count(rows, "row") + " and " + Told.count(columns, "column")
+                            + ".");
             return null;
         }
         return finite(block, list, what, findings) ? block : null;
@@ -157,7 +159,7 @@ final class Blocks {
         return adjoint;
     }
 
-    /** Multiplies by a real factor and a phase, in place. */
+    /** Multiplies by a real factor and a phase, in place; to the last bit the same on every machine. */
     static void turn(double[] block, double factor, double phase) {
         if (phase == 0) {
             for (int k = 0; factor != 1 && k < block.length; k++) {
@@ -165,8 +167,8 @@ final class Blocks {
             }
             return;
         }
-        double cos = factor * Math.cos(phase);
-        double sin = factor * Math.sin(phase);
+        double cos = factor * StrictMath.cos(phase);
+        double sin = factor * StrictMath.sin(phase);
         for (int k = 0; k < block.length; k += 2) {
             double re = block[k];
             double im = block[k + 1];

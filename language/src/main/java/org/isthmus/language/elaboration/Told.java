@@ -42,11 +42,14 @@ final class Told {
         return tidy(z) == 0 ? text : text + ", z = " + nm(z);
     }
 
-    /** A whole number with thin groups, or a round one. */
+    /** A whole number, rounded where it is large. */
     static String count(double value) {
-        return value < 1e6
-                ? String.valueOf((long) value)
-                : number(new BigDecimal(value).round(new MathContext(3)).doubleValue());
+        if (value < 1e6) {
+            return String.valueOf((long) value);
+        }
+        return value < 1e300
+                ? number(new BigDecimal(value).round(new MathContext(3)).doubleValue())
+                : "1e300 or more";
     }
 
     /** {@code 1 site}, {@code 2 sites}. */
