@@ -18,6 +18,7 @@ import org.isthmus.language.findings.Places;
 import org.isthmus.language.isthmus.CatalogueEntry;
 import org.isthmus.language.isthmus.DeviceDeclaration;
 import org.isthmus.language.isthmus.IsthmusPackage;
+import org.isthmus.language.isthmus.LatticeDeclaration;
 import org.isthmus.language.isthmus.MeasurementDeclaration;
 import org.isthmus.language.isthmus.MeasurementSetting;
 import org.isthmus.language.isthmus.MeasurementStatement;
@@ -36,6 +37,16 @@ import org.isthmus.runtime.device.Severity;
 public class DeviceChecks extends ConcernChecks {
     /** Sweeps are looked at from end to end only on devices that elaborate in passing. */
     private static final int IN_PASSING = 20_000;
+
+    /** A lattice at the values of its own header, so that one that no device uses is looked at too. */
+    @Check
+    public void lattice(LatticeDeclaration lattice) {
+        if (sound(lattice)) {
+            for (Finding finding : Elaborator.check(lattice)) {
+                report(finding, lattice, IsthmusPackage.Literals.DECLARATION__NAME);
+            }
+        }
+    }
 
     @Check
     public void elaborates(DeviceDeclaration device) {
@@ -81,8 +92,21 @@ public class DeviceChecks extends ConcernChecks {
         return fresh;
     }
 
+    /** Several devices of one lattice or one base find the same thing at the same place: it is told once. */
+    private boolean news(Finding finding) {
+        Map<Object, Object> context = getContext();
+        if (context == null || finding.place().line() == 0 || finding.severity() == Severity.INFORMATION) {
+            return true;
+        }
+        record Told(String code, org.isthmus.runtime.device.SourceRef place) {}
+        return context.put(new Told(finding.code(), finding.place()), Boolean.TRUE) == null;
+    }
+
     /** Puts a finding where it belongs; one about another file stands at the object that led to it. */
     private void report(Finding finding, EObject fallback, org.eclipse.emf.ecore.EStructuralFeature feature) {
+        if (!news(finding)) {
+            return;
+        }
         Resource resource = fallback.eResource();
         IssueCode code = IssueCode.byId(finding.code()).orElseThrow();
         boolean here = finding.place().line() > 0
