@@ -26,6 +26,11 @@ public record LinePlot(String title, String xLabel, String yLabel, List<Curve> c
     private static final List<String> COLOURS =
             List.of("#0072b2", "#d55e00", "#009e73", "#cc79a7", "#56b4e9", "#e69f00", "#000000");
 
+    /** The colour of a thing by its number. */
+    static String colour(int number) {
+        return COLOURS.get(number % COLOURS.size());
+    }
+
     public LinePlot {
         curves = List.copyOf(curves);
     }

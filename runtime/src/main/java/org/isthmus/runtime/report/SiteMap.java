@@ -103,8 +103,8 @@ record SiteMap(String title, String label, double[] x, double[] y, double[] valu
         return String.format(Locale.ROOT, "%.3g", value);
     }
 
-    private static String colour(double share) {
-        double at = share * (COLOURS.length - 1);
+    static String colour(double share) {
+        double at = Math.max(0, Math.min(1, share)) * (COLOURS.length - 1);
         int lower = (int) Math.max(0, Math.min(COLOURS.length - 2, Math.floor(at)));
         double part = at - lower;
         StringBuilder text = new StringBuilder("#");
