@@ -11,36 +11,16 @@ import org.isthmus.language.isthmus.Argument;
 import org.isthmus.language.isthmus.DephasingDeclaration;
 import org.isthmus.language.isthmus.DeviceDeclaration;
 import org.isthmus.language.isthmus.IsthmusPackage;
-import org.isthmus.language.isthmus.LatticeDeclaration;
 import org.isthmus.language.isthmus.LatticeUse;
 import org.isthmus.language.isthmus.LeadDeclaration;
 import org.isthmus.language.isthmus.LeadSetting;
 import org.isthmus.language.isthmus.Setting;
-import org.isthmus.language.isthmus.SiteDeclaration;
-import org.isthmus.language.isthmus.VectorDeclaration;
 import org.isthmus.language.structure.DeviceStructure;
 import org.isthmus.language.typing.Suggestion;
 import org.isthmus.runtime.device.Side;
 
 /** What blocks must and must not hold. */
 public class StructureChecks extends ConcernChecks {
-    @Check
-    public void latticeIsComplete(LatticeDeclaration lattice) {
-        long vectors = lattice.getMembers().stream()
-                .filter(VectorDeclaration.class::isInstance)
-                .count();
-        boolean sites = lattice.getMembers().stream().anyMatch(SiteDeclaration.class::isInstance);
-        if (vectors == 0 || vectors > 3 || !sites) {
-            report(
-                    IssueCode.INCOMPLETE_LATTICE,
-                    lattice,
-                    IsthmusPackage.Literals.DECLARATION__NAME,
-                    "Lattice '" + lattice.getName() + "' has " + vectors + " vectors and "
-                            + (sites ? "its sites" : "no site")
-                            + "; it needs one to three vectors and at least one site.");
-        }
-    }
-
     @Check
     public void deviceIsComplete(DeviceDeclaration device) {
         if (DeviceStructure.chain(device).stream()
