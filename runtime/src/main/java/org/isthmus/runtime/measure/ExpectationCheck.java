@@ -6,9 +6,11 @@ import java.util.List;
 import java.util.Map;
 import org.isthmus.runtime.catalogue.Catalogue;
 import org.isthmus.runtime.catalogue.FunctionEntry;
+import org.isthmus.runtime.device.AxisPosition;
 import org.isthmus.runtime.device.ExpectedValue;
 import org.isthmus.runtime.device.Measurement;
 import org.isthmus.runtime.device.Measurement.BiasAxis;
+import org.isthmus.runtime.device.Measurement.EnergyPoints;
 import org.isthmus.runtime.device.Measurement.Expectation;
 import org.isthmus.runtime.device.Measurement.NoEnergies;
 import org.isthmus.runtime.result.CsvText;
@@ -137,7 +139,17 @@ final class ExpectationCheck {
         return Field.constant(reduce(reduced.reduction(), evaluate(reduced.operand())), sizes);
     }
 
+    /** Whether an expectation can speak of an axis by its name. */
+    static boolean knows(String name, Measurement measurement, Grid grid) {
+        return grid.indexOf(name) >= 0
+                || name.equals(AxisPosition.ENERGY) && measurement.energy() instanceof EnergyPoints;
+    }
+
     private Field axis(String name) {
+        if (name.equals(AxisPosition.ENERGY) && measurement.energy() instanceof EnergyPoints points) {
+            double[] energies = points.values().stream().mapToDouble(e -> e).toArray();
+            return new Field(new boolean[sizes.length], sizes, new double[][] {energies}, new double[][] {energies});
+        }
         int axis = grid.indexOf(name);
         boolean[] free = new boolean[sizes.length];
         free[axis] = true;

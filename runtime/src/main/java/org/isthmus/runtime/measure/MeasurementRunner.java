@@ -153,6 +153,9 @@ public final class MeasurementRunner {
                 applied.arguments().forEach(this::collect);
             } else if (value instanceof ExpectedValue.Reduced reduced) {
                 collect(reduced.operand());
+            } else if (value instanceof ExpectedValue.AxisValue axis
+                    && !ExpectationCheck.knows(axis.axis(), measurement, grid)) {
+                throw new SolveFailure("'" + axis.axis() + "' has no fixed points that an expectation could speak of.");
             }
         }
 

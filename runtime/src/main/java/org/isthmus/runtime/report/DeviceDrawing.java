@@ -1,5 +1,7 @@
 package org.isthmus.runtime.report;
 
+import java.math.BigDecimal;
+import java.math.MathContext;
 import java.util.List;
 import java.util.Locale;
 import org.isthmus.runtime.device.Device;
@@ -74,7 +76,7 @@ final class DeviceDrawing {
                         + " font-size=\"14\" fill=\"#222\">\n<title>%s</title>\n<rect width=\"%1$d\" height=\"%2$d\""
                         + " fill=\"#fff\"/>\n<text x=\"%d\" y=\"24\" font-weight=\"bold\">%3$s</text>\n",
                 WIDTH,
-                legend + 26 + 20 * device.leads().size(),
+                legend + 46 + 20 * device.leads().size(),
                 LinePlot.escaped(title),
                 MARGIN));
         bonds(svg, px, py);
@@ -99,19 +101,13 @@ final class DeviceDrawing {
             circle(svg, MARGIN, at - 5, 5, "fill=\"none\" stroke=\"" + colour + "\" stroke-width=\"1.8\"");
             text(svg, MARGIN + 14, at, caption(device.leads().get(p)));
         }
+        int below = legend + 20 * device.leads().size();
+        text(svg, MARGIN, below, extent("x from ", across, " nm, ") + extent("y from ", up, " nm"));
         text(
                 svg,
                 MARGIN,
-                legend + 20 * device.leads().size(),
-                String.format(
-                        Locale.ROOT,
-                        "x %.4g to %.4g nm, y %.4g to %.4g nm; on-site energy from %.4g (dark) to %.4g eV (bright)",
-                        across[0],
-                        across[1],
-                        up[0],
-                        up[1],
-                        span[0],
-                        span[1]));
+                below + 20,
+                extent("on-site energy from ", span, " eV (bright)").replace(" to ", " (dark) to "));
         return svg.append("</svg>\n").toString();
     }
 
@@ -128,6 +124,14 @@ final class DeviceDrawing {
                     py[bonds.to(b)]));
         }
         svg.append("</g>\n");
+    }
+
+    private static String extent(String what, double[] range, String unit) {
+        return what + rounded(range[0]) + " to " + rounded(range[1]) + unit;
+    }
+
+    private static String rounded(double value) {
+        return CsvText.number(new BigDecimal(value).round(new MathContext(6)).doubleValue());
     }
 
     private static String caption(Lead lead) {

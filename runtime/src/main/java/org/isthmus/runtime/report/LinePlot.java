@@ -68,11 +68,11 @@ public record LinePlot(String title, String xLabel, String yLabel, List<Curve> c
                         + " font-size=\"14\" fill=\"#222\">%n<title>%s</title>%n<rect width=\"%1$d\" height=\"%2$d\""
                         + " fill=\"#fff\"/>%n",
                 WIDTH,
-                HEIGHT,
+                HEIGHT + legendHeight(),
                 escaped(title.isEmpty() ? yLabel : title)));
         grid(svg, x, y);
         for (int i = 0; i < curves.size(); i++) {
-            curve(svg, curves.get(i), COLOURS.get(i % COLOURS.size()), x, y);
+            curve(svg, curves.get(i), look(i), x, y);
         }
         legend(svg);
         svg.append("</svg>\n");
@@ -120,7 +120,7 @@ public record LinePlot(String title, String xLabel, String yLabel, List<Curve> c
                 HEIGHT - TOP - BOTTOM));
     }
 
-    private static void curve(StringBuilder svg, Curve curve, String colour, AxisScale x, AxisScale y) {
+    private static void curve(StringBuilder svg, Curve curve, String look, AxisScale x, AxisScale y) {
         List<String> runs = new ArrayList<>();
         StringBuilder points = new StringBuilder();
         int inRun = 0;
@@ -135,11 +135,11 @@ public record LinePlot(String title, String xLabel, String yLabel, List<Curve> c
                 inRun = 0;
             }
         }
-        svg.append("<g fill=\"none\" stroke=\"").append(colour).append("\" stroke-width=\"1.8\">\n");
+        svg.append("<g fill=\"none\" ").append(look).append(" stroke-width=\"1.8\">\n");
         for (String run : runs) {
             if (run.indexOf(' ') < 0) {
                 String[] at = run.split(",");
-                svg.append("<circle cx=\"" + at[0] + "\" cy=\"" + at[1] + "\" r=\"3\" fill=\"" + colour + "\"/>\n");
+                svg.append("<circle cx=\"" + at[0] + "\" cy=\"" + at[1] + "\" r=\"3\"/>\n");
             } else {
                 svg.append("<polyline points=\"").append(run).append("\"/>\n");
             }
@@ -153,25 +153,32 @@ public record LinePlot(String title, String xLabel, String yLabel, List<Curve> c
         svg.append("</g>\n");
     }
 
+    /** Colour and dashes: of curves that lie on each other the lower ones show through the gaps. */
+    private static String look(int number) {
+        String dashes =
+                number % 3 == 1 ? " stroke-dasharray=\"7 5\"" : number % 3 == 2 ? " stroke-dasharray=\"2 4\"" : "";
+        return "stroke=\"" + colour(number) + "\"" + dashes;
+    }
+
+    private boolean hasLegend() {
+        return curves.size() > 1 && curves.size() <= LEGEND;
+    }
+
+    private int legendHeight() {
+        return hasLegend() ? 20 * curves.size() + 8 : 0;
+    }
+
+    /** Below the plot, where it hides nothing. */
     private void legend(StringBuilder svg) {
-        if (curves.size() < 2 || curves.size() > LEGEND) {
+        if (!hasLegend()) {
             return;
         }
-        int widest = curves.stream().mapToInt(c -> c.name().length()).max().orElse(0);
-        int left = WIDTH - RIGHT - 48 - 8 * widest;
-        svg.append(String.format(
-                Locale.ROOT,
-                "<rect x=\"%d\" y=\"%d\" width=\"%d\" height=\"%d\" fill=\"#fff\" fill-opacity=\"0.85\"/>%n",
-                left,
-                TOP + 6,
-                WIDTH - RIGHT - 6 - left,
-                20 * curves.size() + 8));
         for (int i = 0; i < curves.size(); i++) {
-            int at = TOP + 22 + 20 * i;
-            svg.append("<g stroke=\"" + COLOURS.get(i % COLOURS.size()) + "\" stroke-width=\"2.5\">\n");
-            line(svg, left + 6, at - 5, left + 30, at - 5);
+            int at = HEIGHT + 12 + 20 * i;
+            svg.append("<g ").append(look(i)).append(" stroke-width=\"2.5\">\n");
+            line(svg, LEFT, at - 5, LEFT + 40, at - 5);
             svg.append("</g>\n");
-            text(svg, left + 38, at, curves.get(i).name(), "");
+            text(svg, LEFT + 50, at, curves.get(i).name(), "");
         }
     }
 

@@ -50,6 +50,9 @@ record SiteMap(String title, String label, double[] x, double[] y, double[] valu
         double radius = Math.max(1.2, Math.min(9, 0.5 * Math.sqrt((double) innerWidth * innerHeight / values.length)));
         if (!cells) {
             for (int i = 0; i < values.length; i++) {
+                if (!Double.isFinite(values[i])) {
+                    continue;
+                }
                 svg.append(String.format(
                         Locale.ROOT,
                         "<circle cx=\"%.1f\" cy=\"%.1f\" r=\"%.1f\" fill=\"%s\"/>\n",
@@ -63,6 +66,9 @@ record SiteMap(String title, String label, double[] x, double[] y, double[] valu
         double[] sums = new double[columns * rows];
         int[] counts = new int[columns * rows];
         for (int i = 0; i < values.length; i++) {
+            if (!Double.isFinite(values[i])) {
+                continue;
+            }
             int column = (int) Math.min(columns - 1, columns * across.part(x[i]));
             int row = (int) Math.min(rows - 1, rows * (1 - up.part(y[i])));
             sums[row * columns + column] += values[i];
@@ -121,10 +127,13 @@ record SiteMap(String title, String label, double[] x, double[] y, double[] valu
             double least = Double.POSITIVE_INFINITY;
             double greatest = Double.NEGATIVE_INFINITY;
             for (double value : values) {
+                if (!Double.isFinite(value)) {
+                    continue;
+                }
                 least = Math.min(least, value);
                 greatest = Math.max(greatest, value);
             }
-            return new Span(least, greatest);
+            return least <= greatest ? new Span(least, greatest) : new Span(0, 0);
         }
 
         double size() {
