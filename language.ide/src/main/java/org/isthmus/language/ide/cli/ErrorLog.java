@@ -18,6 +18,7 @@ import org.apache.log4j.spi.LoggingEvent;
  */
 final class ErrorLog {
     private Path file;
+    private boolean outOfMemory;
 
     /** Sends what the libraries log as an error here, and lets them say nothing else. */
     void captureLibraries() {
@@ -46,6 +47,9 @@ final class ErrorLog {
 
     /** Adds an entry; {@code cause} may be null. */
     synchronized void write(String text, Throwable cause) {
+        for (Throwable at = cause; at != null; at = at.getCause()) {
+            outOfMemory |= at instanceof OutOfMemoryError;
+        }
         try {
             if (file == null) {
                 file = Files.createTempFile("isthmus-", ".log");
@@ -64,6 +68,11 @@ final class ErrorLog {
             // no place for a log: the sentence on the terminal is all there is
             file = null;
         }
+    }
+
+    /** True once a library has run out of memory and carried on. */
+    synchronized boolean outOfMemory() {
+        return outOfMemory;
     }
 
     /** The file, once there is something in it. */

@@ -35,9 +35,7 @@ public final class Main {
         int status;
         try {
             status = line.execute(arguments);
-        } catch (OutOfMemoryError e) {
-            status = failed(e, err, log);
-        } catch (StackOverflowError e) {
+        } catch (OutOfMemoryError | StackOverflowError e) {
             status = failed(e, err, log);
         }
         out.flush();
@@ -63,7 +61,7 @@ public final class Main {
             err.println("isthmus: " + e.getMessage());
             return ExitStatus.USAGE;
         }
-        if (e instanceof OutOfMemoryError) {
+        if (e instanceof OutOfMemoryError || log.outOfMemory()) {
             err.println("isthmus: the memory did not suffice (Java may use "
                     + Runtime.getRuntime().maxMemory() / (1 << 20)
                     + " MiB here); give it more with ISTHMUS_JAVA_OPTIONS=-Xmx8g, or ask for fewer sites.");

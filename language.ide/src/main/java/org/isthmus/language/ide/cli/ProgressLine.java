@@ -58,7 +58,7 @@ final class ProgressLine implements Progress, AutoCloseable {
             bar.stepTo(done);
         } else if (now - lastLine >= BETWEEN_LINES) {
             lastLine = now;
-            err.println(what + ": " + done + (total > 0 ? " of " + total + " solves" : " solves"));
+            err.println(what + ": " + done + (total > 0 ? " of " + total + " points" : " points"));
             err.flush();
         }
     }

@@ -17,6 +17,7 @@ import org.eclipse.xtext.util.CancelIndicator;
 import org.eclipse.xtext.validation.CheckMode;
 import org.eclipse.xtext.validation.IResourceValidator;
 import org.eclipse.xtext.validation.Issue;
+import org.isthmus.language.findings.IssueCode;
 import org.isthmus.runtime.device.Finding;
 import org.isthmus.runtime.device.SourceRef;
 
@@ -64,6 +65,10 @@ final class ProjectCheck {
         List<Finding> findings = new ArrayList<>();
         String path = resource.getURI().toFileString();
         for (Issue issue : validator.validate(resource, CheckMode.ALL, cancel)) {
+            if (IssueCode.byId(String.valueOf(issue.getCode())).isEmpty()) {
+                // the platform turns what a check throws into an issue and logs it: it is a failure of ours, not of the file
+                throw new IllegalStateException("a check failed on " + path + ": " + issue.getMessage());
+            }
             SourceRef place = new SourceRef(
                     path,
                     orZero(issue.getLineNumber()),

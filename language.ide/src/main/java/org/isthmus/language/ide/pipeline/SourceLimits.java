@@ -14,7 +14,7 @@ import org.isthmus.runtime.device.SourceRef;
  */
 final class SourceLimits {
     /** Bytes of a file. */
-    static final long LARGEST_FILE = 1L << 20;
+    static final long LARGEST_FILE = 1L << 18;
 
     /** Brackets of any kind inside each other. */
     static final int DEEPEST_NESTING = 200;

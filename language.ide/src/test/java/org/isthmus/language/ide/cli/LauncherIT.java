@@ -103,6 +103,84 @@ class LauncherIT {
         assertEquals(0, start(anywhere, Map.of(), "bash", "-n", script.toString()).status);
     }
 
+    @Test
+    void runsAFileToTheEnd() throws Exception {
+        Path folder = Files.createDirectories(anywhere.resolve("a run"));
+        Files.writeString(folder.resolve("wire.isth"), TestFiles.WIRE + TestFiles.SPECTRUM);
+        Outcome outcome = start(folder, Map.of(), home.resolve("bin/isthmus").toString(), "run", "wire.isth");
+        assertEquals(0, outcome.status, outcome.err);
+        assertTrue(outcome.out.contains("results/Wire.Spectrum"), outcome.out);
+        assertTrue(Files.exists(folder.resolve("results/Wire.Spectrum/transmission.csv")));
+    }
+
+    @Test
+    void ctrlCLeavesNoHalfResult() throws Exception {
+        Path folder = Files.createDirectories(anywhere.resolve("stopped"));
+        Files.writeString(
+                folder.resolve("wire.isth"),
+                TestFiles.WIRE
+                        + """
+                        measurement Long of Wire {
+                            energy = -1.5 eV .. 1.5 eV in 3000000 points;
+                            record transmission;
+                        }
+                        """);
+        ProcessBuilder builder = new ProcessBuilder(home.resolve("bin/isthmus").toString(), "run", "wire.isth")
+                .directory(folder.toFile())
+                .redirectErrorStream(true)
+                .redirectOutput(folder.resolve("log").toFile());
+        builder.environment().putIfAbsent("JAVA_HOME", System.getProperty("java.home"));
+        Process process = builder.start();
+        Thread.sleep(6000);
+        assertTrue(process.isAlive(), () -> "over too soon: " + read(folder.resolve("log")));
+        assertEquals(
+                0,
+                new ProcessBuilder("kill", "-INT", String.valueOf(process.pid()))
+                        .start()
+                        .waitFor());
+        assertTrue(process.waitFor(30, TimeUnit.SECONDS), "does not stop");
+        assertEquals(130, process.exitValue(), () -> read(folder.resolve("log")));
+        try (Stream<Path> left = Files.walk(folder)) {
+            List<String> names = left.filter(Files::isRegularFile)
+                    .map(f -> folder.relativize(f).toString())
+                    .sorted()
+                    .toList();
+            assertEquals(List.of("log", "wire.isth"), names);
+        }
+    }
+
+    @Test
+    void tooLittleMemoryIsASentence() throws Exception {
+        Path folder = Files.createDirectories(anywhere.resolve("small"));
+        Files.writeString(
+                folder.resolve("big.isth"),
+                """
+                device Big {
+                    lattice Square(a = 1 nm);
+                    body box(0 nm .. 2000 nm, 0 nm .. 2000 nm);
+                    lead source from left;
+                    lead drain from right;
+                }
+                """);
+        Outcome outcome = start(
+                folder,
+                Map.of("ISTHMUS_JAVA_OPTIONS", "-Xmx64m"),
+                home.resolve("bin/isthmus").toString(),
+                "describe",
+                "big.isth");
+        assertEquals(3, outcome.status, outcome.err);
+        assertTrue(outcome.err.contains("the memory did not suffice"), outcome.err);
+        assertTrue(outcome.err.lines().noneMatch(l -> l.startsWith("\tat ")), outcome.err);
+    }
+
+    private static String read(Path file) {
+        try {
+            return Files.readString(file);
+        } catch (IOException e) {
+            return e.toString();
+        }
+    }
+
     record Outcome(int status, String out, String err) {}
 
     static Outcome start(Path folder, Map<String, String> environment, String... command) throws Exception {

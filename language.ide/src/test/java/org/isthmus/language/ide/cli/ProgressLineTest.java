@@ -20,7 +20,7 @@ class ProgressLineTest {
             }
         }
         assertEquals(
-                "Spectrum of Wire: 10 of 100 solves\nSpectrum of Wire: 20 of 100 solves\n",
+                "Spectrum of Wire: 10 of 100 points\nSpectrum of Wire: 20 of 100 points\n",
                 err.toString().replace(System.lineSeparator(), "\n"));
     }
 }
