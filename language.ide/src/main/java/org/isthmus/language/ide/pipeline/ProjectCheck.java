@@ -66,7 +66,8 @@ final class ProjectCheck {
         String path = resource.getURI().toFileString();
         for (Issue issue : validator.validate(resource, CheckMode.ALL, cancel)) {
             if (IssueCode.byId(String.valueOf(issue.getCode())).isEmpty()) {
-                // the platform turns what a check throws into an issue and logs it: it is a failure of ours, not of the file
+                // the platform turns what a check throws into an issue and logs it: it is a failure of ours, not of the
+                // file
                 throw new IllegalStateException("a check failed on " + path + ": " + issue.getMessage());
             }
             SourceRef place = new SourceRef(
