@@ -74,11 +74,12 @@ public interface ComplexBackend {
 
     /**
      * Eliminates the first {@code count} unknowns of a square matrix, which may be used up; count³/3 + count²·others +
-     * count·others².
+     * count·others², of a Hermitian one half of the last.
      *
+     * @param hermitian true promises that A is Hermitian, so that half of the complement need not be computed
      * @throws SingularMatrixException where a pivot is exactly zero
      */
-    default Reduction eliminate(Dense a, int count) {
+    default Reduction eliminate(Dense a, int count, boolean hermitian) {
         return new FactoredReduction(this, a.complex(), count);
     }
 

@@ -27,6 +27,11 @@ final class FactoredReduction implements Reduction {
     }
 
     @Override
+    public void addComplement(Dense to, int[] places) {
+        to.scatterAdd(complement(), places);
+    }
+
+    @Override
     public Dense right() {
         return Dense.of(right);
     }

@@ -5,6 +5,9 @@ public interface Reduction {
     /** The Schur complement A₂₂ − A₂₁A₁₁⁻¹A₁₂. */
     Dense complement();
 
+    /** Adds the Schur complement into the rows and columns of another matrix with these numbers. */
+    void addComplement(Dense to, int[] places);
+
     /** A₁₁⁻¹A₁₂. */
     Dense right();
 

@@ -7,10 +7,12 @@ package org.isthmus.runtime.kernel;
 public final class Schur {
     private final ComplexMatrix triangle;
     private final ComplexMatrix vectors;
+    private final double size;
 
     public Schur(ComplexMatrix triangle, ComplexMatrix vectors) {
         this.triangle = triangle;
         this.vectors = vectors;
+        size = Math.max(triangle.frobenius(), Double.MIN_NORMAL);
     }
 
     public ComplexMatrix triangle() {
@@ -75,9 +77,10 @@ public final class Schur {
         // the eigenvector of the second eigenvalue in the plane is (f, g): rotate it into the first direction
         double[] c1 = {fr / norm, fi / norm};
         double[] c2 = {gr / norm, gi / norm};
+        // the triangle is zero left of the pair and below it
         rotateRows(t, k, c1, c2);
-        rotateColumns(t, k, c1, c2);
-        rotateColumns(vectors, k, c1, c2);
+        rotateColumns(t, k, k + 2, c1, c2);
+        rotateColumns(vectors, k, vectors.rows(), c1, c2);
         t.set(k + 1, k, 0, 0);
         t.set(k, k, br, bi);
         t.set(k + 1, k + 1, ar, ai);
@@ -85,7 +88,7 @@ public final class Schur {
 
     /** Rows k, k+1 ← Q†·rows for Q = [c1, −c2*; c2, c1*]. */
     private static void rotateRows(ComplexMatrix m, int k, double[] c1, double[] c2) {
-        for (int j = 0; j < m.columns(); j++) {
+        for (int j = k; j < m.columns(); j++) {
             double pr = m.real(k, j);
             double pi = m.imaginary(k, j);
             double qr = m.real(k + 1, j);
@@ -104,9 +107,9 @@ public final class Schur {
         }
     }
 
-    /** Columns k, k+1 ← columns·Q. */
-    private static void rotateColumns(ComplexMatrix m, int k, double[] c1, double[] c2) {
-        for (int i = 0; i < m.rows(); i++) {
+    /** The first rows of columns k, k+1 ← columns·Q. */
+    private static void rotateColumns(ComplexMatrix m, int k, int rows, double[] c1, double[] c2) {
+        for (int i = 0; i < rows; i++) {
             double pr = m.real(i, k);
             double pi = m.imaginary(i, k);
             double qr = m.real(i, k + 1);
@@ -131,35 +134,37 @@ public final class Schur {
         double[] yr = new double[k + 1];
         double[] yi = new double[k + 1];
         yr[k] = 1;
-        double scale = Math.max(triangle.frobenius(), Double.MIN_NORMAL);
-        double least = Math.ulp(1.0) * scale;
-        for (int i = k - 1; i >= 0; i--) {
-            double sr = 0;
-            double si = 0;
-            for (int j = i + 1; j <= k; j++) {
-                sr -= triangle.real(i, j) * yr[j] - triangle.imaginary(i, j) * yi[j];
-                si -= triangle.real(i, j) * yi[j] + triangle.imaginary(i, j) * yr[j];
+        double least = Math.ulp(1.0) * size;
+        double[] t = triangle.data();
+        for (int j = k; j >= 0; j--) {
+            if (j < k) {
+                double dr = triangle.real(k, k) - triangle.real(j, j);
+                double di = triangle.imaginary(k, k) - triangle.imaginary(j, j);
+                double d2 = dr * dr + di * di;
+                if (d2 < least * least) {
+                    // an equal eigenvalue: any small number serves, as in LAPACK's ztrevc
+                    dr = least;
+                    di = 0;
+                    d2 = least * least;
+                }
+                double re = (yr[j] * dr + yi[j] * di) / d2;
+                yi[j] = (yi[j] * dr - yr[j] * di) / d2;
+                yr[j] = re;
             }
-            double dr = triangle.real(i, i) - triangle.real(k, k);
-            double di = triangle.imaginary(i, i) - triangle.imaginary(k, k);
-            double d2 = dr * dr + di * di;
-            if (d2 < least * least) {
-                // an equal eigenvalue: any small number serves, as in LAPACK's ztrevc
-                dr = least;
-                di = 0;
-                d2 = least * least;
+            for (int i = 0; i < j; i++) {
+                int at = 2 * (j * n + i);
+                yr[i] += t[at] * yr[j] - t[at + 1] * yi[j];
+                yi[i] += t[at] * yi[j] + t[at + 1] * yr[j];
             }
-            yr[i] = (sr * dr + si * di) / d2;
-            yi[i] = (si * dr - sr * di) / d2;
         }
         ComplexMatrix vector = ComplexMatrix.zeros(n, 1);
+        double[] z = vectors.data();
+        double[] x = vector.data();
         for (int j = 0; j <= k; j++) {
             for (int i = 0; i < n; i++) {
-                vector.add(
-                        i,
-                        0,
-                        vectors.real(i, j) * yr[j] - vectors.imaginary(i, j) * yi[j],
-                        vectors.real(i, j) * yi[j] + vectors.imaginary(i, j) * yr[j]);
+                int at = 2 * (j * n + i);
+                x[2 * i] += z[at] * yr[j] - z[at + 1] * yi[j];
+                x[2 * i + 1] += z[at] * yi[j] + z[at + 1] * yr[j];
             }
         }
         vector.scale(1 / vector.frobenius(), 0);

@@ -29,19 +29,17 @@ public record SolvePlan(String method, String reason, List<SolveStep> steps, int
         return 8 * steps.stream().mapToDouble(SolveStep::work).sum();
     }
 
-    /** Bytes of the fronts and of the Schur complements that wait, at the most, per energy. */
+    /** Bytes of the front at work, twice, and of those that wait with their Schur complements, at the most, per energy. */
     public long bytes() {
         long waiting = 0;
         long most = 0;
         for (SolveStep step : steps) {
-            long front = step instanceof Eliminate e ? (long) e.front() * e.front() : square(root().orbitals().length);
+            long front = square(step instanceof Eliminate e ? e.front() : root().orbitals().length);
             most = Math.max(most, waiting + 2 * front);
             for (int child : step.children()) {
-                waiting -= square(((Eliminate) steps.get(child)).border().length);
+                waiting -= square(((Eliminate) steps.get(child)).front());
             }
-            if (step instanceof Eliminate e) {
-                waiting += square(e.border().length);
-            }
+            waiting += front;
         }
         return 16 * most;
     }

@@ -41,7 +41,7 @@ final class Elimination {
     private final Keep keep;
     private final int[] where;
     private final boolean real;
-    private final Dense[] complements;
+    private final Reduction[] reductions;
     private final int[][] borders;
     private final Front[] fronts;
     private double amplification;
@@ -86,7 +86,7 @@ final class Elimination {
         this.keep = keep;
         this.where = where;
         real = zi == 0 && entries.real() && backend.realArithmetic();
-        complements = new Dense[plan.steps().size()];
+        reductions = new Reduction[plan.steps().size()];
         borders = new int[plan.steps().size()][];
         fronts = keep == Keep.NOTHING ? null : new Front[plan.steps().size() - 1];
     }
@@ -151,14 +151,14 @@ final class Elimination {
             for (int i = 0; i < labels.length; i++) {
                 places[i] = where[labels[i]];
             }
-            front.scatterAdd(complements[child], places);
+            reductions[child].addComplement(front, places);
         }
         return front;
     }
 
     private void letGo(int step) {
         for (int child : plan.steps().get(step).children()) {
-            complements[child] = null;
+            reductions[child] = null;
         }
     }
 
@@ -189,7 +189,7 @@ final class Elimination {
         }
         letGo(k);
         amplification = Math.max(amplification, reduction.amplification());
-        complements[k] = reduction.complement();
+        reductions[k] = reduction;
         borders[k] = border;
         if (keep != Keep.NOTHING) {
             boolean all = keep == Keep.ALL;
@@ -205,7 +205,7 @@ final class Elimination {
     /** The elimination; null where the block is exactly singular. */
     private Reduction reduced(Dense front, int count) {
         try {
-            return backend.eliminate(front, count);
+            return backend.eliminate(front, count, zi == 0);
         } catch (SingularMatrixException ex) {
             return null;
         }

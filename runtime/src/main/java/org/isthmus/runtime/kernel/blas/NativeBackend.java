@@ -89,8 +89,8 @@ public final class NativeBackend implements ComplexBackend {
     }
 
     @Override
-    public Reduction eliminate(Dense a, int count) {
-        return new NativeReduction(this, a, count);
+    public Reduction eliminate(Dense a, int count, boolean hermitian) {
+        return new NativeReduction(this, a, count, hermitian);
     }
 
     @Override

@@ -1,5 +1,6 @@
 package org.isthmus.runtime.kernel.blas;
 
+import java.util.stream.IntStream;
 import org.bytedeco.javacpp.DoublePointer;
 import org.bytedeco.javacpp.IntPointer;
 import org.bytedeco.openblas.global.openblas_full;
@@ -14,15 +15,21 @@ import org.isthmus.runtime.kernel.SingularMatrixException;
  */
 final class NativeReduction implements Reduction {
     private static final byte NO = 'N';
+
+    /** Columns of a Hermitian complement that are computed at once, from the first's diagonal down. */
+    private static final int BLOCK = 64;
+
     private static final int COLUMNS = openblas_full.LAPACK_COL_MAJOR;
 
     private final NativeBackend backend;
     private final Dense a;
     private final int count;
+    private final boolean hermitian;
     private final int[] pivots;
 
-    NativeReduction(NativeBackend backend, Dense a, int count) {
+    NativeReduction(NativeBackend backend, Dense a, int count, boolean hermitian) {
         this.backend = backend;
+        this.hermitian = hermitian;
         this.a = a;
         this.count = count;
         pivots = new int[count];
@@ -47,46 +54,57 @@ final class NativeReduction implements Reduction {
         }
         NativeBackend.check(info, "getrf");
         if (others > 0) {
-            DoublePointer pRight = whole.getPointer(right);
-            DoublePointer pBelow = whole.getPointer((long) parts * count);
-            DoublePointer pComplement = whole.getPointer(right + (long) parts * count);
-            solve(a.real(), count, others, whole, n, rows, pRight, n);
-            if (a.real()) {
-                openblas_full.cblas_dgemm(
-                        openblas_full.CblasColMajor,
-                        openblas_full.CblasNoTrans,
-                        openblas_full.CblasNoTrans,
-                        others,
-                        others,
-                        count,
-                        -1,
-                        pBelow,
-                        n,
-                        pRight,
-                        n,
-                        1,
-                        pComplement,
-                        n);
-            } else {
-                openblas_full.cblas_zgemm(
-                        openblas_full.CblasColMajor,
-                        openblas_full.CblasNoTrans,
-                        openblas_full.CblasNoTrans,
-                        others,
-                        others,
-                        count,
-                        buffers.scalar(-1),
-                        pBelow,
-                        n,
-                        pRight,
-                        n,
-                        buffers.one(),
-                        pComplement,
-                        n);
+            solve(a.real(), count, others, whole, n, rows, whole.getPointer(right), n);
+            int width = hermitian ? BLOCK : others;
+            for (int first = 0; first < others; first += width) {
+                subtractProduct(whole, hermitian ? first : 0, others, first, Math.min(others, first + width), buffers);
             }
         }
         whole.position(0).get(a.data(), 0, a.data().length);
         rows.position(0).get(pivots, 0, count);
+    }
+
+    /** A part of A₂₂ − A₂₁·(A₁₁⁻¹A₁₂): rows and columns from the first, without the end. */
+    private void subtractProduct(
+            DoublePointer whole, int firstRow, int endRow, int firstColumn, int endColumn, Buffers buffers) {
+        int n = a.rows();
+        long parts = a.real() ? 1 : 2;
+        DoublePointer below = whole.getPointer(parts * (count + firstRow));
+        DoublePointer right = whole.getPointer(parts * n * (count + firstColumn));
+        DoublePointer to = whole.getPointer(parts * ((long) n * (count + firstColumn) + count + firstRow));
+        if (a.real()) {
+            openblas_full.cblas_dgemm(
+                    openblas_full.CblasColMajor,
+                    openblas_full.CblasNoTrans,
+                    openblas_full.CblasNoTrans,
+                    endRow - firstRow,
+                    endColumn - firstColumn,
+                    count,
+                    -1,
+                    below,
+                    n,
+                    right,
+                    n,
+                    1,
+                    to,
+                    n);
+        } else {
+            openblas_full.cblas_zgemm(
+                    openblas_full.CblasColMajor,
+                    openblas_full.CblasNoTrans,
+                    openblas_full.CblasNoTrans,
+                    endRow - firstRow,
+                    endColumn - firstColumn,
+                    count,
+                    buffers.scalar(-1),
+                    below,
+                    n,
+                    right,
+                    n,
+                    buffers.one(),
+                    to,
+                    n);
+        }
     }
 
     private static void solve(
@@ -108,7 +126,65 @@ final class NativeReduction implements Reduction {
 
     @Override
     public Dense complement() {
-        return a.block(count, a.rows(), count, a.rows());
+        int others = a.rows() - count;
+        Dense complement = Dense.zeros(others, others, a.real());
+        addComplement(complement, IntStream.range(0, others).toArray());
+        return complement;
+    }
+
+    @Override
+    public void addComplement(Dense to, int[] places) {
+        if (hermitian) {
+            addTriangle(to, places);
+            return;
+        }
+        int n = a.rows();
+        double[] from = a.data();
+        double[] data = to.data();
+        for (int j = count; j < n; j++) {
+            int base = places[j - count] * to.rows();
+            for (int i = count; i < n; i++) {
+                int source = j * n + i;
+                int target = base + places[i - count];
+                if (a.real()) {
+                    data[target] += from[source];
+                } else {
+                    data[2 * target] += from[2 * source];
+                    data[2 * target + 1] += from[2 * source + 1];
+                }
+            }
+        }
+    }
+
+    /** Only the diagonal and what is below it was computed. */
+    private void addTriangle(Dense to, int[] places) {
+        int n = a.rows();
+        int m = to.rows();
+        double[] from = a.data();
+        double[] data = to.data();
+        for (int j = count; j < n; j++) {
+            int column = places[j - count];
+            if (a.real()) {
+                data[column * m + column] += from[j * n + j];
+            } else {
+                data[2 * (column * m + column)] += from[2 * (j * n + j)];
+            }
+            for (int i = j + 1; i < n; i++) {
+                int source = j * n + i;
+                int row = places[i - count];
+                int target = column * m + row;
+                int mirrored = row * m + column;
+                if (a.real()) {
+                    data[target] += from[source];
+                    data[mirrored] += from[source];
+                } else {
+                    data[2 * target] += from[2 * source];
+                    data[2 * target + 1] += from[2 * source + 1];
+                    data[2 * mirrored] += from[2 * source];
+                    data[2 * mirrored + 1] -= from[2 * source + 1];
+                }
+            }
+        }
     }
 
     @Override
