@@ -1,17 +1,18 @@
 package org.isthmus.language.ide.pipeline;
 
 import java.util.LinkedHashSet;
+import java.util.List;
 import java.util.Set;
 
 /**
  * A quick look at a text: what it declares and what words it uses, without a parse. It may only err towards more.
  *
  * @param namespace empty where the file names none
- * @param declared names of the declarations at file level
+ * @param declared names of the declarations at file level that other files may use
  * @param words every identifier outside comments and strings
  */
 record DeclaredNames(String namespace, Set<String> declared, Set<String> words) {
-    private static final Set<String> KINDS = Set.of("let", "material", "lattice", "device", "measurement");
+    private static final Set<String> KINDS = Set.of("let", "material", "lattice", "device");
 
     static DeclaredNames scan(String text) {
         Set<String> declared = new LinkedHashSet<>();
@@ -68,12 +69,19 @@ record DeclaredNames(String namespace, Set<String> declared, Set<String> words) 
 
     /** True where a name that {@code other} declares may be meant by a word of this text. */
     boolean mayUse(DeclaredNames other) {
-        for (String name : other.declared) {
-            if (words.contains(name) && !(declared.contains(name) && namespace.equals(other.namespace))) {
-                return true;
-            }
-        }
-        return false;
+        return sees(other) && other.declared.stream().anyMatch(name -> words.contains(name) && !isOwn(name, other));
+    }
+
+    /** A name without a namespace is seen from everywhere, others where an import or a qualified name spells theirs. */
+    private boolean sees(DeclaredNames other) {
+        return other.namespace.isEmpty()
+                || other.namespace.equals(namespace)
+                || words.containsAll(List.of(other.namespace.split("\\.")));
+    }
+
+    /** A file's own declaration comes before another's of the same full name. */
+    private boolean isOwn(String name, DeclaredNames other) {
+        return declared.contains(name) && namespace.equals(other.namespace);
     }
 
     static boolean startsWord(char c) {

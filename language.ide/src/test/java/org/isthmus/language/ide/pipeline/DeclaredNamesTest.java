@@ -31,6 +31,18 @@ class DeclaredNamesTest {
     }
 
     @Test
+    void anotherNamespaceIsSeenOnlyWhereItIsSpelt() {
+        DeclaredNames library = DeclaredNames.scan("namespace lab.wires; let spacing = 1 nm; device Wire { }");
+        assertFalse(DeclaredNames.scan("namespace mine; device Other { lattice Chain(a = spacing); }")
+                .mayUse(library));
+        assertTrue(DeclaredNames.scan("import lab.wires.*; device Other extends Wire { }")
+                .mayUse(library));
+        assertTrue(DeclaredNames.scan("device Other extends lab.wires.Wire { }").mayUse(library));
+        assertFalse(DeclaredNames.scan("import lab.leads.*; device Other extends Wire { }")
+                .mayUse(library));
+    }
+
+    @Test
     void ownDeclarationComesBeforeAnothersOfTheSameName() {
         DeclaredNames own = DeclaredNames.scan("device Wire { } measurement M of Wire { }");
         assertFalse(own.mayUse(DeclaredNames.scan("device Wire { }")));
