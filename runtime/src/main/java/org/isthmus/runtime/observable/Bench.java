@@ -5,7 +5,6 @@ import java.util.Arrays;
 import java.util.List;
 import java.util.Map;
 import java.util.TreeMap;
-import java.util.TreeSet;
 import java.util.concurrent.ConcurrentHashMap;
 import java.util.concurrent.atomic.AtomicLong;
 import java.util.concurrent.atomic.DoubleAccumulator;
@@ -25,6 +24,9 @@ import org.isthmus.runtime.solve.Solver;
  */
 public final class Bench {
     private static final int FEWEST_PANELS = 6;
+
+    /** In kT: between two of them a Fermi function is as good as a polynomial for 15 points. */
+    private static final double[] THERMAL_BREAKS = {-22, -12, -6, -2.5, 0, 2.5, 6, 12, 22};
 
     private final Solver solver;
     private final Needs needs;
@@ -199,52 +201,47 @@ public final class Bench {
         return result.values();
     }
 
-    private List<Double> breaks(double lowest, double highest) {
-        TreeSet<Double> breaks = new TreeSet<>();
-        breaks.add(lowest);
-        breaks.add(highest);
-        for (double opening : solver.modeOpenings()) {
-            addInside(breaks, opening, lowest, highest);
-        }
-        double[] bounds = solver.spectrumBounds();
-        addInside(breaks, bounds[0], lowest, highest);
+    private List<EnergyIntegral.Break> breaks(double lowest, double highest) {
+        double nearest = Math.min(1e-9 * (1 + Math.abs(highest) + Math.abs(lowest)), 1e-3 * (highest - lowest));
+        TreeMap<Double, Boolean> breaks = new TreeMap<>();
         for (int p = 0; p < leads(); p++) {
-            double kT = Fermi.kT(lead(p));
-            for (double width : new double[] {-16, -4, 0, 4, 16}) {
-                addInside(breaks, lead(p).mu() + width * kT, lowest, highest);
+            for (double width : THERMAL_BREAKS) {
+                breaks.put(lead(p).mu() + width * Fermi.kT(lead(p)), false);
             }
         }
-        List<Double> merged = merged(breaks, 1e-9 * (1 + Math.abs(highest) + Math.abs(lowest)));
-        int pieces = Math.max(1, (FEWEST_PANELS + merged.size() - 2) / Math.max(1, merged.size() - 1));
-        List<Double> fine = new ArrayList<>();
-        for (int k = 0; k + 1 < merged.size(); k++) {
-            for (int i = 0; i < pieces; i++) {
-                fine.add(merged.get(k) + (merged.get(k + 1) - merged.get(k)) * i / pieces);
+        breaks.put(lowest, false);
+        breaks.put(highest, false);
+        solver.modeOpenings().forEach(opening -> breaks.put(opening, true));
+        for (double bound : solver.spectrumBounds()) {
+            breaks.put(bound, true);
+        }
+        List<EnergyIntegral.Break> inside = new ArrayList<>();
+        breaks.subMap(lowest, true, highest, true).forEach((at, rough) -> {
+            EnergyIntegral.Break last = inside.isEmpty() ? null : inside.get(inside.size() - 1);
+            if (last == null || at - last.at() > nearest) {
+                inside.add(new EnergyIntegral.Break(at, rough));
+            } else if (rough || at == highest) {
+                double kept = at == highest ? highest : last.at();
+                inside.set(inside.size() - 1, new EnergyIntegral.Break(kept, rough || last.rough()));
+            }
+        });
+        return divided(inside);
+    }
+
+    /** At least so many panels that a feature between break points is seen. */
+    private static List<EnergyIntegral.Break> divided(List<EnergyIntegral.Break> breaks) {
+        int panels = breaks.size() - 1;
+        int pieces = Math.max(1, (FEWEST_PANELS + panels - 1) / Math.max(1, panels));
+        List<EnergyIntegral.Break> fine = new ArrayList<>();
+        for (int k = 0; k < panels; k++) {
+            fine.add(breaks.get(k));
+            double length = breaks.get(k + 1).at() - breaks.get(k).at();
+            for (int i = 1; i < pieces; i++) {
+                fine.add(new EnergyIntegral.Break(breaks.get(k).at() + length * i / pieces, false));
             }
         }
-        fine.add(merged.get(merged.size() - 1));
+        fine.add(breaks.get(panels));
         return fine;
-    }
-
-    private static void addInside(TreeSet<Double> breaks, double energy, double lowest, double highest) {
-        if (energy > lowest && energy < highest) {
-            breaks.add(energy);
-        }
-    }
-
-    private static List<Double> merged(TreeSet<Double> values, double nearest) {
-        List<Double> merged = new ArrayList<>();
-        for (double value : values) {
-            if (merged.isEmpty() || value - merged.get(merged.size() - 1) > nearest) {
-                merged.add(value);
-            }
-        }
-        double last = values.last();
-        merged.set(merged.size() - 1, last);
-        if (merged.size() == 1) {
-            merged.add(0, values.first());
-        }
-        return merged;
     }
 
     /** Lowest and highest energy at which the leads' Fermi functions differ from their ends, within the spectrum. */

@@ -106,9 +106,9 @@ public final class ChargeDensity extends Observable {
 
     /** Good to the accuracy in electrons: the terms are of the order of one. */
     private static double[] line(Bench bench, double from, double to, DoubleFunction<double[]> integrand) {
-        List<Double> breaks = new ArrayList<>();
+        List<EnergyIntegral.Break> breaks = new ArrayList<>();
         for (int k = 0; k <= PANELS; k++) {
-            breaks.add(from + (to - from) * k / PANELS);
+            breaks.add(new EnergyIntegral.Break(from + (to - from) * k / PANELS, true));
         }
         EnergyIntegral.Result result =
                 EnergyIntegral.alongContour(breaks, integrand, bench.accuracy(), bench.accuracy());

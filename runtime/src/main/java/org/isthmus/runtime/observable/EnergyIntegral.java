@@ -7,8 +7,7 @@ import java.util.function.DoubleFunction;
 
 /**
  * Integrals over energy by adaptive Gauss–Kronrod panels (15 and 7 points; nodes from Piessens et al., QUADPACK, Springer
- * 1983). The first panels end at the break points; in each, E = a + (b − a)·s²(3 − 2s) takes the square-root behaviour at
- * mode openings away. Panels are halved, worst generation first, and summed in order, so that the result does not depend
+ * 1983). The first panels end at the break points; a substitution takes the square-root behaviour at mode openings away. Panels are halved, worst generation first, and summed in order, so that the result does not depend
  * on threads.
  */
 final class EnergyIntegral {
@@ -41,20 +40,40 @@ final class EnergyIntegral {
     }
 
     /** Integrates along any line; nothing is announced. */
-    static Result alongContour(List<Double> breaks, DoubleFunction<double[]> integrand, double accuracy, double floor) {
+    static Result alongContour(List<Break> breaks, DoubleFunction<double[]> integrand, double accuracy, double floor) {
         return new EnergyIntegral(null).integrate(breaks, integrand, accuracy, floor);
     }
 
     /** A value with the error that was reached, relative to the largest component. */
     record Result(double[] values, double relativeError) {}
 
-    private record Panel(double a, double b, double from, double to, int depth) {
+    /** A first panel's end. {@code rough} where the integrand may go like a square root. */
+    record Break(double at, boolean rough) {}
+
+    /** Part {@code from..to} of the way s = 0..1 through a first panel. */
+    private record Panel(Break a, Break b, double from, double to, int depth) {
+        /** E(s): square at one rough end, s²(3 − 2s) between two, a straight line between smooth ones. */
         double energy(double s) {
-            return a + (b - a) * s * s * (3 - 2 * s);
+            double length = b.at() - a.at();
+            if (a.rough() && b.rough()) {
+                return a.at() + length * s * s * (3 - 2 * s);
+            }
+            if (a.rough()) {
+                return a.at() + length * s * s;
+            }
+            return b.rough() ? b.at() - length * (1 - s) * (1 - s) : a.at() + length * s;
         }
 
+        /** dE/ds. */
         double weight(double s) {
-            return (b - a) * 6 * s * (1 - s);
+            double length = b.at() - a.at();
+            if (a.rough() && b.rough()) {
+                return length * 6 * s * (1 - s);
+            }
+            if (a.rough()) {
+                return length * 2 * s;
+            }
+            return b.rough() ? length * 2 * (1 - s) : length;
         }
 
         double node(int k) {
@@ -73,10 +92,10 @@ final class EnergyIntegral {
      * @param accuracy relative to the integral of the integrand's absolute value
      * @param floor an error that is small enough, whatever the accuracy: rounding of the integrand cannot be refined away
      */
-    Result integrate(List<Double> breaks, DoubleFunction<double[]> integrand, double accuracy, double floor) {
+    Result integrate(List<Break> breaks, DoubleFunction<double[]> integrand, double accuracy, double floor) {
         List<Panel> open = new ArrayList<>();
         for (int k = 0; k + 1 < breaks.size(); k++) {
-            if (breaks.get(k + 1) > breaks.get(k)) {
+            if (breaks.get(k + 1).at() > breaks.get(k).at()) {
                 open.add(new Panel(breaks.get(k), breaks.get(k + 1), 0, 1, 0));
             }
         }
@@ -115,7 +134,7 @@ final class EnergyIntegral {
             }
         }
         done.sort((x, y) -> {
-            int order = Double.compare(x.panel().a(), y.panel().a());
+            int order = Double.compare(x.panel().a().at(), y.panel().a().at());
             return order != 0
                     ? order
                     : Double.compare(x.panel().from(), y.panel().from());

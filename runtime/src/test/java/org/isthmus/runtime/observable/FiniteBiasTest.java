@@ -126,6 +126,35 @@ class FiniteBiasTest {
         assertEquals(expected, found, 1e-8 * expected);
     }
 
+    /** Three contacts on one level: T = ΓΓ'/|…|² for each pair; flows and correlations add up to nothing. */
+    @Test
+    void threeLeads() throws Exception {
+        Device pair = TestDevices.level(0.03, 0.01, 0.02);
+        List<org.isthmus.runtime.device.Lead> leads = new java.util.ArrayList<>(pair.leads());
+        leads.add(TestDevices.wideBand("third", 0.03, 0));
+        Device level = Runs.leads(Runs.with(pair, leads), 0, 0.1, 0, 0, 300, -0.05);
+        MeasurementResult result = Runs.of(level)
+                .record("current", "noise", "heatCurrent", "residual")
+                .run();
+        double[] current = Runs.table(result, "current").rows().get(0);
+        assertEquals(0, current[0] + current[1] + current[2], 1e-14 * G1);
+        double[] noise = Runs.table(result, "noise").rows().get(0);
+        for (int a = 0; a < 3; a++) {
+            assertTrue(noise[3 * a + a] > 0);
+            assertEquals(0, noise[3 * a] + noise[3 * a + 1] + noise[3 * a + 2], 1e-12 * noise[0]);
+            for (int b = 0; b < 3; b++) {
+                assertEquals(noise[3 * a + b], noise[3 * b + a], 1e-12 * noise[0]);
+                // currents of electrons are anticorrelated between contacts (Büttiker 1992)
+                assertTrue(a == b || noise[3 * a + b] < 0);
+            }
+        }
+        // what the two cold contacts exchange: ∫ from 0 to 0.1 eV in closed form; the warm one empties both alike
+        double atan = (Math.atan((0.1 - 0.03) / 0.03) - Math.atan(-0.03 / 0.03)) / 0.03;
+        double share = current[0] / 0.01 - current[1] / 0.02;
+        assertEquals(-G1 * (0.01 + 0.02 + 0.03) * atan, share, 1e-8 * Math.abs(share));
+        assertTrue(Runs.table(result, "residual").rows().get(0)[0] < 1e-10);
+    }
+
     /** Johnson and Nyquist, S = 4kTG, and charge conservation: noise sums to zero over one of its leads. */
     @Test
     void equilibriumNoise() throws Exception {

@@ -46,9 +46,11 @@ class LinearResponseTest {
     @Test
     void zeroTemperatureIsTheLimit() throws Exception {
         Device level = TestDevices.level(0.01, 0.01, 0.02);
-        double cold = Runs.of(level).at(1e-3, 0).record("conductance").column("left>right (S)")[0];
         double limit = Runs.of(level).at(0, 0).record("conductance").column("left>right (S)")[0];
-        assertEquals(limit, cold, 1e-8 * limit);
+        for (double kelvin : new double[] {1e-3, 1e-6, 1e-9}) {
+            double cold = Runs.of(level).at(kelvin, 0).record("conductance").column("left>right (S)")[0];
+            assertEquals(limit, cold, 1e-8 * limit, kelvin + " K");
+        }
     }
 
     /** A resonance far narrower than kT is not missed: G → (q²/h)·2πΓΓ'/(Γ + Γ')·(−df/dE) at the level. */
