@@ -6,6 +6,7 @@ import java.util.HexFormat;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
+import java.util.TreeSet;
 import java.util.concurrent.CancellationException;
 import java.util.concurrent.ConcurrentHashMap;
 import java.util.concurrent.ExecutionException;
@@ -18,6 +19,7 @@ import org.isthmus.runtime.device.ExpectedValue;
 import org.isthmus.runtime.device.Finding;
 import org.isthmus.runtime.device.Lead;
 import org.isthmus.runtime.device.Measurement;
+import org.isthmus.runtime.device.Measurement.AdaptiveEnergies;
 import org.isthmus.runtime.device.Measurement.Expectation;
 import org.isthmus.runtime.device.Severity;
 import org.isthmus.runtime.kernel.ComplexBackend;
@@ -65,7 +67,7 @@ public final class MeasurementRunner {
         long start = System.nanoTime();
         ForkJoinPool pool = new ForkJoinPool(threads);
         try {
-            pool.submit(run::points).get();
+            pool.submit(run::all).get();
         } catch (ExecutionException e) {
             throw failure(e.getCause(), family, measurement);
         } catch (InterruptedException e) {
@@ -138,7 +140,10 @@ public final class MeasurementRunner {
             }
             recorded.forEach(this::place);
             expected.values().forEach(this::place);
-            steps = tasks.values().stream().mapToLong(t -> 1 + t.axisEnergies()).sum();
+            steps = (twice() ? 2 : 1)
+                    * tasks.values().stream()
+                            .mapToLong(t -> 1 + t.axisEnergies())
+                            .sum();
         }
 
         private void collect(ExpectedValue value) {
@@ -164,6 +169,48 @@ public final class MeasurementRunner {
                 tasks.computeIfAbsent(point, p -> new PointTask(measurement, grid, p))
                         .add(request);
             }
+        }
+
+        /** Averages over adaptive energies: first every member finds its own, then all take values at all of them. */
+        private boolean twice() {
+            return measurement.energy() instanceof AdaptiveEnergies
+                    && !measurement.averages().isEmpty();
+        }
+
+        void all() {
+            points();
+            if (twice()) {
+                shareEnergies();
+                points();
+            }
+        }
+
+        /** What is averaged is taken at the same energies: those that any of its members asked for. */
+        private void shareEnergies() {
+            Map<List<Double>, TreeSet<Double>> shared = new HashMap<>();
+            tasks.forEach((point, task) -> {
+                TreeSet<Double> energies = shared.computeIfAbsent(notAveraged(point), p -> new TreeSet<>());
+                for (double energy : task.axis()) {
+                    energies.add(energy);
+                }
+            });
+            tasks.forEach((point, task) -> {
+                if (task.axis().length > 0) {
+                    task.fix(shared.get(notAveraged(point)).stream()
+                            .mapToDouble(e -> e)
+                            .toArray());
+                }
+            });
+        }
+
+        private List<Double> notAveraged(List<Double> point) {
+            List<Double> kept = new ArrayList<>();
+            for (int k = 0; k < grid.axes(); k++) {
+                if (!measurement.averages().contains(grid.name(k))) {
+                    kept.add(point.get(k));
+                }
+            }
+            return kept;
         }
 
         /** Points of equal device together, so that it is elaborated and planned once. */

@@ -27,6 +27,8 @@ final class PointTask {
     private final Grid grid;
     private final List<Double> point;
     private final List<Request> requests = new ArrayList<>();
+    private double[] axis = new double[0];
+    private boolean fixed;
 
     PointTask(Measurement measurement, Grid grid, List<Double> point) {
         this.measurement = measurement;
@@ -93,7 +95,7 @@ final class PointTask {
     void observe(Bench bench, Runnable solved) {
         Bench atEnergies = bench.asking(needs(true));
         Bench overEnergies = bench.asking(needs(false));
-        double[] axis = energies(atEnergies, solved);
+        axis = energies(atEnergies, solved);
         for (Request request : requests) {
             Bench used = request.resolved(hasEnergyAxis()) ? atEnergies : overEnergies;
             List<ObservableCall> columns = request.observable().columns(request.call(), bench.device());
@@ -136,17 +138,30 @@ final class PointTask {
         return all == null ? new double[0] : all;
     }
 
-    private double[] energies(Bench bench, Runnable solved) {
-        double[] axis = new double[0];
-        if (measurement.energy() instanceof EnergyPoints points) {
-            axis = points.values().stream().mapToDouble(e -> e).toArray();
-            if (wantsAxis()) {
-                bench.announce(axis, solved);
-            }
-        } else if (measurement.energy() instanceof AdaptiveEnergies adaptive) {
-            axis = adaptive(bench, adaptive);
-        }
+    /** The energies at which values were taken along the axis. */
+    double[] axis() {
         return axis;
+    }
+
+    /** Where values have to be taken from now on, instead of where the axis says. */
+    void fix(double[] energies) {
+        axis = energies;
+        fixed = true;
+    }
+
+    private double[] energies(Bench bench, Runnable solved) {
+        if (fixed) {
+            bench.announce(axis);
+            return axis;
+        }
+        if (measurement.energy() instanceof EnergyPoints points) {
+            double[] energies = points.values().stream().mapToDouble(e -> e).toArray();
+            if (wantsAxis()) {
+                bench.announce(energies, solved);
+            }
+            return energies;
+        }
+        return measurement.energy() instanceof AdaptiveEnergies adaptive ? adaptive(bench, adaptive) : new double[0];
     }
 
     /** Halves intervals until the straight line between neighbours is good to the tolerance at the middle of each. */

@@ -135,6 +135,29 @@ class RunBehaviourTest {
         assertEquals(1, java.util.Arrays.stream(y).max().orElseThrow(), 1e-3);
     }
 
+    /** What is averaged shares its energies, also where each member would choose its own. */
+    @Test
+    void averageOverAdaptiveEnergies() throws Exception {
+        ResultTable table = Runs.of(v -> TestDevices.level(0.1 * v.get("seed"), 0.01, 0.01))
+                .axis(new SweepAxis("seed", "", 1, List.of(1.0, 2.0), SourceRef.NONE))
+                .average("seed")
+                .energy(new AdaptiveEnergies(0, 0.3, 0.02, SourceRef.NONE))
+                .record("transmission")
+                .table();
+        assertEquals(
+                List.of("energy (eV)", "left>right", "left>right +-", "right>left", "right>left +-"), table.headers());
+        double before = Double.NEGATIVE_INFINITY;
+        for (double[] row : table.rows()) {
+            assertTrue(row[0] > before);
+            before = row[0];
+            double first = 1e-4 / ((row[0] - 0.1) * (row[0] - 0.1) + 1e-4);
+            double second = 1e-4 / ((row[0] - 0.2) * (row[0] - 0.2) + 1e-4);
+            assertEquals((first + second) / 2, row[1], 1e-12);
+            // two values: deviation/√2 is half their distance
+            assertEquals(Math.abs(first - second) / 2, row[2], 1e-12);
+        }
+    }
+
     /** The same bits for any number of threads, with everything at once. */
     @Test
     void threadsDoNotMatter() throws Exception {
