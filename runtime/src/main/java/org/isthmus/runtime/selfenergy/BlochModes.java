@@ -6,6 +6,7 @@ import java.util.TreeSet;
 import org.apache.commons.math3.complex.Complex;
 import org.isthmus.runtime.kernel.ComplexBackend;
 import org.isthmus.runtime.kernel.ComplexMatrix;
+import org.isthmus.runtime.kernel.Dense;
 import org.isthmus.runtime.kernel.Op;
 import org.isthmus.runtime.kernel.Schur;
 import org.isthmus.runtime.kernel.SingularMatrixException;
@@ -26,7 +27,16 @@ public final class BlochModes implements SurfaceMethod {
     private static final double NEAR = 1e-6;
     private static final double[][] SHIFTS = {{0.83, 1.31}, {-1.17, 0.71}, {0.57, -1.61}, {-0.77, -1.93}};
 
+    /** Where the end of a lead is looked for, as part of the hopping. */
+    private static final double[] BESIDE = {0, 1e-9, -1e-9, 1e-8, -1e-8, 1e-7, -1e-7, 1e-6, -1e-6};
+
+    /** A wave slower than this part of the hopping stands still; 10⁻⁹ off a band edge, v = 6·10⁻⁵. */
+    private static final double STANDING = 2e-5;
+
+    private static final double ACCURATE = 1e-9;
+
     private final LeadBlocks blocks;
+    private final double hopping;
     private final int[] kept;
     private final int[] eliminated;
     private final int[] wanted;
@@ -35,6 +45,8 @@ public final class BlochModes implements SurfaceMethod {
     public BlochModes(LeadBlocks blocks, int[] orbitals, ComplexBackend backend) {
         this.blocks = blocks;
         this.backend = backend;
+        double largest = Dense.of(blocks.h01()).largest();
+        hopping = largest > 0 ? largest : 1;
         TreeSet<Integer> touched = new TreeSet<>();
         for (int orbital : orbitals) {
             touched.add(orbital);
@@ -64,8 +76,68 @@ public final class BlochModes implements SurfaceMethod {
         }
     }
 
+    /**
+     * {@inheritDoc}
+     *
+     * <p>Where a wave stands still, as at the edge of a band, nothing tells incoming from outgoing, and on a flat band every
+     * λ solves the equation: the end of the lead is then taken a little beside, by 10⁻⁹ to 10⁻⁶ of the hopping. That is
+     * the end of a lead whose bands are moved by as much, so that every sum rule stays exact.
+     */
     @Override
     public Surface solve(double real, double imaginary) {
+        if (imaginary > 0) {
+            return attempt(real, imaginary).surface();
+        }
+        Surface first = null;
+        RuntimeException failure = null;
+        for (double step : BESIDE) {
+            try {
+                Attempt attempt = attempt(real + step * hopping, 0);
+                Surface surface = new Surface(
+                        attempt.surface().green(),
+                        attempt.surface().openModes(),
+                        attempt.surface().residual(),
+                        step * hopping);
+                if (trustworthy(attempt)) {
+                    return surface;
+                }
+                first = first == null && retarded(surface) ? surface : first;
+            } catch (ArithmeticException | SingularMatrixException e) {
+                failure = failure == null ? e : failure;
+            }
+        }
+        if (first != null) {
+            return first;
+        }
+        throw failure != null ? failure : new ArithmeticException("its waves in and out cannot be told apart");
+    }
+
+    /**
+     * An end of the lead.
+     *
+     * @param slowest smallest group velocity of a propagating wave, eV per cell; infinite without any
+     */
+    private record Attempt(Surface surface, double slowest) {}
+
+    private boolean trustworthy(Attempt attempt) {
+        return attempt.slowest() > STANDING * hopping
+                && attempt.surface().residual() < ACCURATE
+                && retarded(attempt.surface());
+    }
+
+    /** A = i(g − g†), the spectral function, has no negative eigenvalue. */
+    private boolean retarded(Surface surface) {
+        if (!surface.green().finite()) {
+            return false;
+        }
+        ComplexMatrix spectral = surface.green().copy();
+        spectral.addScaled(surface.green().adjoint(), -1);
+        spectral.scale(0, 1);
+        double[] values = backend.hermitianEigen(spectral).values();
+        return values.length == 0 || values[0] > -ACCURATE * 100 * Math.max(1 / hopping, values[values.length - 1]);
+    }
+
+    private Attempt attempt(double real, double imaginary) {
         ComplexMatrix t = blocks.outward(real, imaginary);
         ComplexMatrix back = blocks.inward(real, imaginary);
         ComplexMatrix m = blocks.diagonal(real, imaginary);
@@ -99,11 +171,11 @@ public final class BlochModes implements SurfaceMethod {
         }
     }
 
-    private Surface solve(ComplexMatrix m, ComplexMatrix t, ComplexMatrix back, boolean onAxis, int[] orbitals) {
+    private Attempt solve(ComplexMatrix m, ComplexMatrix t, ComplexMatrix back, boolean onAxis, int[] orbitals) {
         int n = m.rows();
         if (t.frobenius() == 0) {
             ComplexMatrix alone = backend.inverse(m);
-            return new Surface(alone.select(orbitals, orbitals), 0, 0);
+            return new Attempt(new Surface(alone.select(orbitals, orbitals), 0, 0), Double.POSITIVE_INFINITY);
         }
         double scale = Math.max(t.frobenius(), m.frobenius() / Math.sqrt(n));
         Complex shift = null;
@@ -159,7 +231,11 @@ public final class BlochModes implements SurfaceMethod {
         backend.multiplyAdd(-1, Op.NONE, t, Op.NONE, step, dressed);
         ComplexMatrix green = backend.inverse(dressed);
         int open = (int) outward.stream().filter(wave -> wave.velocity() > 0).count();
-        return new Surface(green.select(orbitals, orbitals), open, residual(m, t, back, green));
+        double slowest = waves.stream()
+                .mapToDouble(wave -> Math.abs(wave.velocity()))
+                .min()
+                .orElse(Double.POSITIVE_INFINITY);
+        return new Attempt(new Surface(green.select(orbitals, orbitals), open, residual(m, t, back, green)), slowest);
     }
 
     /** (A − σB)⁻¹B for the pencil A = [0, 1; −T', M], B = [1, 0; 0, T], energies in units of scale; null near a λ. */

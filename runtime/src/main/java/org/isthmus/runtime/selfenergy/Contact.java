@@ -23,8 +23,9 @@ public interface Contact {
      * @param sigma eV
      * @param openModes waves that propagate in the lead; −1 where it has none to count
      * @param residual of the lead's own equation, relative
+     * @param beside how far from the energy asked for it was taken, eV: not 0 only at the very edge of a band
      */
-    record SelfEnergy(ComplexMatrix sigma, int openModes, double residual) {}
+    record SelfEnergy(ComplexMatrix sigma, int openModes, double residual, double beside) {}
 
     /** Energies where the number of open modes changes, ascending, eV; empty for a lead without bands. */
     List<Double> modeOpenings();

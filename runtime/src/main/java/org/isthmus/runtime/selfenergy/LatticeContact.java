@@ -124,7 +124,8 @@ final class LatticeContact implements Contact {
         return new SelfEnergy(
                 backend.multiply(backend.multiply(out, surface.green()), back),
                 surface.openModes(),
-                surface.residual());
+                surface.residual(),
+                surface.beside());
     }
 
     private static ComplexMatrix coupling(ComplexMatrix h, ComplexMatrix s, double real, double imaginary) {

@@ -55,13 +55,13 @@ final class SiteContact implements Contact {
             for (int i = 0; i < orbitals.length; i++) {
                 sigma.set(i, i, 0, -broadening[i] / 2);
             }
-            return new SelfEnergy(sigma, -1, 0);
+            return new SelfEnergy(sigma, -1, 0, 0);
         }
         double[] value = interpolated(real);
         for (int i = 0; i < orbitals.length; i++) {
             sigma.set(i, i, value[0], value[1]);
         }
-        return new SelfEnergy(sigma, -1, 0);
+        return new SelfEnergy(sigma, -1, 0, 0);
     }
 
     private double[] interpolated(double energy) {

@@ -22,6 +22,9 @@ final class FrontalSolver implements Solver {
     /** A solution whose own equations are fulfilled no better than this is not given out. */
     private static final double TRUSTWORTHY = 1e-5;
 
+    /** How often another energy is tried where leads are not defined at the one asked for. */
+    private static final int TRIALS_BESIDE = 4;
+
     private final OperatingPoint point;
     private final SolvePlan plan;
     private final List<Contact> contacts;
@@ -66,6 +69,9 @@ final class FrontalSolver implements Solver {
             broadening[p] = LeadTraces.broadening(coupled.sigmas[p].sigma());
         }
         LeadTraces traces = new LeadTraces(backend, coupled.green, coupled.places, broadening);
+        double[][] transmissions = traces.transmissions();
+        double[] spectralTraces = traces.spectralTraces();
+        requireConservation(energy, transmissions, spectralTraces);
         double[][] byLead = null;
         double[] total = null;
         if (needs.sites()) {
@@ -84,8 +90,8 @@ final class FrontalSolver implements Solver {
         }
         return new CoherentSolution(
                 energy,
-                traces.transmissions(),
-                traces.spectralTraces(),
+                transmissions,
+                spectralTraces,
                 modes,
                 needs.correlators() ? traces.correlators() : null,
                 byLead,
@@ -102,6 +108,25 @@ final class FrontalSolver implements Solver {
         return sweep().diagonal(coupled.remainder, coupled.green);
     }
 
+    /** Tr[Γ_p A] = Σ_q T_pq and T_pq ≥ 0: what self-energies that are not retarded, or lost digits, would break. */
+    private void requireConservation(double energy, double[][] transmissions, double[] spectralTraces) {
+        for (int p = 0; p < spectralTraces.length; p++) {
+            double sum = 0;
+            double least = 0;
+            for (int q = 0; q < spectralTraces.length; q++) {
+                sum += transmissions[q][p];
+                least = Math.min(least, transmissions[q][p]);
+            }
+            double broken = Math.max(Math.abs(sum - spectralTraces[p]), -least) / Math.max(1, Math.abs(sum));
+            if (!(broken < TRUSTWORTHY)) {
+                throw new SolveFailure("At " + energy + " eV current at lead '"
+                        + point.device().leads().get(p).name() + "' of device '"
+                        + point.device().name() + "' is conserved to " + broken
+                        + " only; move the energy a little, away from a band edge or a bound state.");
+            }
+        }
+    }
+
     /** G Γ G† for a Γ on some rows. */
     private ComplexMatrix fed(ComplexMatrix green, int[] places, ComplexMatrix broadening) {
         int[] all = IntStream.range(0, green.rows()).toArray();
@@ -116,18 +141,24 @@ final class FrontalSolver implements Solver {
     private record Coupled(
             Remainder remainder, ComplexMatrix green, Contact.SelfEnergy[] sigmas, int[][] places, double residual) {}
 
-    private Coupled couple(double real, double imaginary, Keep keep) {
+    private Coupled couple(double asked, double imaginary, Keep keep) {
+        double real = asked;
+        Contact.SelfEnergy[] sigmas = selfEnergies(real, imaginary);
+        for (int trial = 0; trial < TRIALS_BESIDE && beside(sigmas) != 0; trial++) {
+            // at a band edge: the limit from beside, of body and leads alike, so that they still match
+            double step = beside(sigmas);
+            real = asked + (trial % 2 == 0 ? step : -step);
+            sigmas = selfEnergies(real, imaginary);
+        }
         Remainder remainder = new Elimination(plan, entries, backend, real, imaginary, keep, where.get()).run();
         ComplexMatrix matrix = remainder.matrix().copy();
         int[] index = where.get();
         for (int i = 0; i < remainder.orbitals().length; i++) {
             index[remainder.orbitals()[i]] = i;
         }
-        Contact.SelfEnergy[] sigmas = new Contact.SelfEnergy[contacts.size()];
         int[][] places = new int[contacts.size()][];
         double residual = remainder.rounding();
         for (int p = 0; p < sigmas.length; p++) {
-            sigmas[p] = selfEnergy(p, real, imaginary);
             places[p] =
                     Arrays.stream(contacts.get(p).orbitals()).map(o -> index[o]).toArray();
             ComplexMatrix minus = sigmas[p].sigma().copy();
@@ -153,6 +184,23 @@ final class FrontalSolver implements Solver {
                     + " only; move the energy a little, away from a band edge or a bound state.");
         }
         return new Coupled(remainder, green, sigmas, places, residual);
+    }
+
+    private Contact.SelfEnergy[] selfEnergies(double real, double imaginary) {
+        Contact.SelfEnergy[] sigmas = new Contact.SelfEnergy[contacts.size()];
+        for (int p = 0; p < sigmas.length; p++) {
+            sigmas[p] = selfEnergy(p, real, imaginary);
+        }
+        return sigmas;
+    }
+
+    /** The largest step that a lead has taken from the energy asked for, eV; 0 where none had to. */
+    private static double beside(Contact.SelfEnergy[] sigmas) {
+        double largest = 0;
+        for (Contact.SelfEnergy sigma : sigmas) {
+            largest = Math.abs(sigma.beside()) > Math.abs(largest) ? sigma.beside() : largest;
+        }
+        return largest;
     }
 
     private Contact.SelfEnergy selfEnergy(int lead, double real, double imaginary) {
