@@ -1,11 +1,12 @@
 package org.isthmus.language.elaboration;
 
+import org.eclipse.emf.ecore.EObject;
+import org.eclipse.xtext.EcoreUtil2;
 import org.isthmus.language.elaboration.geometry.BodySites;
 import org.isthmus.language.elaboration.geometry.Extent;
 import org.isthmus.language.evaluation.Code.TruthNode;
 import org.isthmus.language.evaluation.EvaluationFailure;
 import org.isthmus.language.evaluation.Shape;
-import org.isthmus.language.evaluation.Site;
 import org.isthmus.language.evaluation.Value;
 import org.isthmus.language.findings.IssueCode;
 import org.isthmus.language.isthmus.Body;
@@ -17,6 +18,9 @@ import org.isthmus.language.isthmus.Body;
 final class ExpandLattice implements Pass {
     /** Largest number of sites: tables of some hundred bytes per site must fit into a gibibyte with room to spare. */
     static final int MOST_SITES = 2_000_000;
+
+    /** Operations that a condition may cost in all. */
+    private static final long MOST_WORK = 80_000_000;
 
     @Override
     public void run(Draft draft) {
@@ -43,13 +47,13 @@ final class ExpandLattice implements Pass {
             return;
         }
         Shape shape = value.shape();
-        boolean everywhere = body.getCondition() == null;
         TruthNode condition = draft.evaluator.condition(body.getCondition());
-        double tolerance = draft.frame.tolerance();
-        Site site = new Site();
-        long[] rank = {0};
-        BodySites.Chooser chooser = (x, y, z, index) ->
-                shape.contains(x, y, z, tolerance) && (everywhere || condition.at(site.at(x, y, z, rank[0]++)));
+        int nodes = body.getCondition() == null
+                ? 0
+                : EcoreUtil2.getAllContentsOfType(body.getCondition(), EObject.class)
+                        .size();
+        BodySites.Chooser chooser =
+                new ShapeChooser(shape, draft.frame.tolerance(), body.getCondition() == null ? null : condition);
         double[] bounds = shape.bounds();
         for (double bound : bounds) {
             if (Double.isNaN(bound)) {
@@ -57,7 +61,8 @@ final class ExpandLattice implements Pass {
                 return;
             }
         }
-        BodySites.Search found = BodySites.search(draft.frame, Extent.of(bounds), chooser, MOST_SITES, draft.cancelled);
+        BodySites.Search found = BodySites.search(
+                draft.frame, Extent.of(bounds), chooser, MOST_SITES, MOST_WORK / Math.max(10, nodes), draft.cancelled);
         if (found instanceof BodySites.Unbounded open) {
             draft.findings.add(IssueCode.UNBOUNDED_BODY, body.getShape(), unbounded(draft, open.axis()));
         } else if (found instanceof BodySites.TooMany many) {

@@ -10,11 +10,13 @@ import java.util.function.BooleanSupplier;
  * within a cell of the basis, found again by their numbers.
  */
 public final class BodySites {
-    /** Cells that are looked at for one body: beyond it, counting them would take longer than a user waits. */
-    public static final int CELL_LIMIT = 40_000_000;
-
-    /** Rows of cells that are looked at for one body. */
+    /** Rows of cells that are looked at for one body, and borders of its shape in all of them. */
     private static final int ROW_LIMIT = 4_000_000;
+
+    private static final long BORDER_LIMIT = 100_000_000;
+
+    /** Cells in the box around a body, wherever they are taken or not: counting goes on in whole numbers. */
+    private static final long CELL_LIMIT = 1L << 40;
 
     private final LatticeFrame frame;
     private final CellRows rows;
@@ -30,15 +32,33 @@ public final class BodySites {
         this.rows = rows;
     }
 
-    /** Decides whether a place belongs to a body. */
+    /** A body's shape, and a choice among the sites inside it. */
     @FunctionalInterface
     public interface Chooser {
+        /** True inside the shape and on its border. */
+        boolean inside(double x, double y, double z);
+
         /**
-         * Decides.
+         * True for a site that the body has; asked for sites inside the shape only, in the order of the table.
          *
-         * @param index number of the sites taken so far
+         * @param rank number of the sites inside the shape before this one, taken or not
          */
-        boolean takes(double x, double y, double z, int index);
+        default boolean takes(double x, double y, double z, long rank) {
+            return true;
+        }
+
+        /**
+         * Tells where a row of sites (x, y, z) + n·(dx, dy, dz) comes near the shape's border. Unless overridden every
+         * place counts as near.
+         */
+        default void borders(double x, double y, double z, double dx, double dy, double dz, Borders borders) {
+            borders.near(Double.NEGATIVE_INFINITY, Double.POSITIVE_INFINITY);
+        }
+
+        /** Number of borders that one row may have. */
+        default int complexity() {
+            return 1;
+        }
     }
 
     /** What a search for sites gives. */
@@ -62,46 +82,89 @@ public final class BodySites {
      *
      * @param box around the body
      * @param limit largest number of sites
+     * @param rankLimit largest number of sites inside the shape, taken or not
      * @param cancelled asked often; once true the search ends
      * @throws CancellationException when cancelled
      */
-    public static Search search(LatticeFrame frame, Extent box, Chooser chooser, int limit, BooleanSupplier cancelled) {
+    public static Search search(
+            LatticeFrame frame, Extent box, Chooser chooser, int limit, long rankLimit, BooleanSupplier cancelled) {
         OptionalInt open = CellRows.unboundedAxis(frame, box);
         if (open.isPresent()) {
             return new Unbounded(open.getAsInt());
         }
-        CellRows rows = CellRows.of(frame, box, CELL_LIMIT / frame.basisCount(), ROW_LIMIT);
-        if (!rows.complete()) {
-            return new TooMany(rows.cells() * frame.basisCount());
+        CellRows rows = CellRows.of(frame, box, CELL_LIMIT, ROW_LIMIT);
+        double estimate = rows.cells() * frame.basisCount();
+        if (!rows.complete() || (long) rows.count() * frame.basisCount() * chooser.complexity() > BORDER_LIMIT) {
+            return new TooMany(estimate);
         }
         BodySites sites = new BodySites(frame, rows);
-        return sites.collect(chooser, limit, cancelled)
-                ? new Found(sites)
-                : new TooMany(rows.cells() * frame.basisCount());
+        return sites.collect(chooser, limit, rankLimit, cancelled) ? new Found(sites) : new TooMany(estimate);
     }
 
-    private boolean collect(Chooser chooser, int limit, BooleanSupplier cancelled) {
+    private boolean collect(Chooser chooser, int limit, long rankLimit, BooleanSupplier cancelled) {
+        int basisCount = frame.basisCount();
+        Borders[] borders = new Borders[basisCount];
+        for (int b = 0; b < basisCount; b++) {
+            borders[b] = new Borders();
+        }
+        long rank = 0;
+        int steps = 0;
         firstOfRow = new int[rows.count() + 1];
         for (int r = 0; r < rows.count(); r++) {
             firstOfRow[r] = count;
             int n2 = rows.second(r);
             int n3 = rows.third(r);
-            for (int n1 = rows.start(r); n1 < rows.end(r); n1++) {
-                if ((n1 & 0xfff) == 0) {
+            for (int b = 0; b < basisCount; b++) {
+                borders[b].clear();
+                chooser.borders(
+                        frame.coordinate(0, n2, n3, b, 0),
+                        frame.coordinate(0, n2, n3, b, 1),
+                        frame.coordinate(0, n2, n3, b, 2),
+                        frame.vector(0, 0),
+                        frame.vector(0, 1),
+                        frame.vector(0, 2),
+                        borders[b]);
+                borders[b].join();
+            }
+            if ((++steps & 0xff) == 0) {
+                stop(cancelled);
+            }
+            int end = rows.end(r);
+            int n1 = rows.start(r);
+            while (n1 < end) {
+                if ((++steps & 0xfff) == 0) {
                     stop(cancelled);
                 }
-                for (int b = 0; b < frame.basisCount(); b++) {
+                double next = Double.POSITIVE_INFINITY;
+                for (int b = 0; b < basisCount; b++) {
+                    Borders border = borders[b];
+                    boolean compute = border.open(n1);
+                    if (!compute && !border.inside()) {
+                        next = Math.min(next, border.next());
+                        continue;
+                    }
                     double x = frame.coordinate(n1, n2, n3, b, 0);
                     double y = frame.coordinate(n1, n2, n3, b, 1);
                     double z = frame.coordinate(n1, n2, n3, b, 2);
-                    if (!chooser.takes(x, y, z, count)) {
+                    if (compute) {
+                        border.answer(n1, chooser.inside(x, y, z));
+                    }
+                    if (!border.inside()) {
+                        next = Math.min(next, border.next());
                         continue;
                     }
-                    if (count == limit) {
+                    next = Double.NEGATIVE_INFINITY;
+                    if (rank == rankLimit) {
                         return false;
                     }
-                    add(r, n1, b, x, y, z);
+                    if (chooser.takes(x, y, z, rank++)) {
+                        if (count == limit) {
+                            return false;
+                        }
+                        add(r, n1, b, x, y, z);
+                    }
                 }
+                n1 = next > n1 + 1 ? (int) Math.min(end, Math.ceil(next)) : n1 + 1;
             }
         }
         firstOfRow[rows.count()] = count;

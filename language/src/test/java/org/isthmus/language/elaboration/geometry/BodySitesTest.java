@@ -109,7 +109,7 @@ class BodySitesTest {
     void holesInARowAreNotFound() {
         LatticeFrame frame = SomeLattices.square(1).frame();
         BodySites sites = ((BodySites.Found) BodySites.search(
-                        frame, Extent.of(0, 9, 0, 0), (x, y, z, index) -> x < 2.5 || x > 6.5, 100, () -> false))
+                        frame, Extent.of(0, 9, 0, 0), (x, y, z) -> x < 2.5 || x > 6.5, 100, 100, () -> false))
                 .sites();
         assertEquals(6, sites.count());
         assertEquals(-1, sites.find(3, 0, 0, 0));
@@ -129,7 +129,7 @@ class BodySitesTest {
     @Test
     void openAxesAreNamed() {
         LatticeFrame square = SomeLattices.square(1).frame();
-        BodySites.Search search = BodySites.search(square, Extent.of(0, 5), (x, y, z, i) -> true, 10, () -> false);
+        BodySites.Search search = BodySites.search(square, Extent.of(0, 5), (x, y, z) -> true, 10, 10, () -> false);
         assertEquals(new BodySites.Unbounded(1), search);
         // a slanted chain is bounded by its x alone
         LatticeFrame slanted = SomeLattices.named("slanted")
@@ -144,7 +144,7 @@ class BodySitesTest {
     void hugeBodiesAreCountedNotBuilt() {
         LatticeFrame frame = SomeLattices.square(0.1).frame();
         BodySites.Search search =
-                BodySites.search(frame, Extent.of(0, 4000, 0, 3000), (x, y, z, i) -> true, 1000, () -> false);
+                BodySites.search(frame, Extent.of(0, 4000, 0, 3000), (x, y, z) -> true, 1000, 1000, () -> false);
         assertEquals(1.2e9, assertInstanceOf(BodySites.TooMany.class, search).estimate(), 1e6);
         for (double side : new double[] {1e6, 1e9, 1e15, 1e200}) {
             assertInstanceOf(
@@ -152,7 +152,8 @@ class BodySitesTest {
                     BodySites.search(
                             SomeLattices.cubic(0.1).frame(),
                             Extent.of(-side, side, -side, side, -side, side),
-                            (x, y, z, i) -> true,
+                            (x, y, z) -> true,
+                            1000,
                             1000,
                             () -> false));
         }
@@ -172,7 +173,7 @@ class BodySitesTest {
         assertThrows(
                 CancellationException.class,
                 () -> BodySites.search(
-                        frame, Extent.of(0, 1000, 0, 1000), (x, y, z, i) -> true, 2_000_000, () -> true));
+                        frame, Extent.of(0, 1000, 0, 1000), (x, y, z) -> true, 2_000_000, 2_000_000, () -> true));
     }
 
     @Test

@@ -109,7 +109,8 @@ final class SomeLattices {
         BodySites.Search search = BodySites.search(
                 frame,
                 box,
-                (x, y, z, index) -> inside(box, 0, x, margin) && inside(box, 1, y, margin) && inside(box, 2, z, margin),
+                (x, y, z) -> inside(box, 0, x, margin) && inside(box, 1, y, margin) && inside(box, 2, z, margin),
+                2_000_000,
                 2_000_000,
                 () -> false);
         return ((BodySites.Found) search).sites();
