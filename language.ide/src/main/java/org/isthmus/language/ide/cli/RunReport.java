@@ -80,6 +80,8 @@ final class RunReport {
                     + (keys.isEmpty() ? "" : " over " + keys) + "; "
                     + table.rows().size() + (table.rows().size() == 1 ? " row" : " rows"));
         }
+        stdout.println(
+                "    report.html: the same as plots, with the device, the expectations and where all comes from");
     }
 
     void kept(Job job, StoredResult stored) {

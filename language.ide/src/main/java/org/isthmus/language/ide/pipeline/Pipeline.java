@@ -33,6 +33,7 @@ import org.isthmus.runtime.kernel.selection.Backends;
 import org.isthmus.runtime.measure.MeasurementRunner;
 import org.isthmus.runtime.measure.RunFailure;
 import org.isthmus.runtime.plan.Planner;
+import org.isthmus.runtime.report.ResultReport;
 import org.isthmus.runtime.result.MeasurementResult;
 import org.isthmus.runtime.result.Provenance;
 import org.isthmus.runtime.result.ResultFolder;
@@ -150,7 +151,10 @@ public final class Pipeline {
      * @return the folder written
      */
     public Path write(Path out, Job job, MeasurementResult result, int threads) throws IOException {
-        return ResultFolder.write(out, result, provenance(job, threads), Map.of());
+        Optional<Device> device = deviceOf(job);
+        Provenance provenance = provenance(job, device, threads);
+        return ResultFolder.write(
+                out, result, provenance, Map.of("report.html", ResultReport.html(result, provenance, device)));
     }
 
     /** The result of an earlier run, where it is still that of the job. */
@@ -158,17 +162,21 @@ public final class Pipeline {
         return StoredResult.of(out, job, tool);
     }
 
-    private Provenance provenance(Job job, int threads) {
+    /** The device at the first point of its sweeps. */
+    private static Optional<Device> deviceOf(Job job) {
         Map<String, Double> values = new LinkedHashMap<>(job.measurement().settings());
         for (Measurement.Axis axis : job.measurement().axes()) {
             if (axis instanceof Measurement.SweepAxis sweep && !sweep.values().isEmpty()) {
                 values.put(sweep.parameter(), sweep.values().get(0));
             }
         }
-        Device device = job.family().elaborate(values).device();
+        return Optional.ofNullable(job.family().elaborate(values).device());
+    }
+
+    private Provenance provenance(Job job, Optional<Device> device, int threads) {
         return new Provenance(
                 tool,
-                device == null ? "" : String.join("\n", describe(device).physicalLines()),
+                device.map(d -> String.join("\n", describe(d).physicalLines())).orElse(""),
                 job.inputs(),
                 job.given(),
                 backend().description(),
