@@ -24,6 +24,7 @@ import org.isthmus.language.isthmus.DeviceDeclaration;
 import org.isthmus.runtime.description.DeviceDescription;
 import org.isthmus.runtime.device.Device;
 import org.isthmus.runtime.device.DeviceFamily;
+import org.isthmus.runtime.device.DeviceText;
 import org.isthmus.runtime.device.Finding;
 import org.isthmus.runtime.device.Measurement;
 import org.isthmus.runtime.device.Severity;
@@ -176,7 +177,7 @@ public final class Pipeline {
     private Provenance provenance(Job job, Optional<Device> device, int threads) {
         return new Provenance(
                 tool,
-                device.map(d -> String.join("\n", describe(d).physicalLines())).orElse(""),
+                device.map(DeviceText::of).orElse(""),
                 job.inputs(),
                 job.given(),
                 backend().description(),
