@@ -21,6 +21,9 @@ import org.isthmus.runtime.solve.SolveFailure;
 /** One point of the axes: the requests that want it, answered on one bench. */
 final class PointTask {
     private static final int FIRST_ENERGIES = 33;
+    /** Energies that are solved before values are taken from them: enough for any number of threads. */
+    private static final int TOGETHER = 256;
+
     private static final int MOST_ENERGIES = 20_000;
 
     private final Measurement measurement;
@@ -95,31 +98,50 @@ final class PointTask {
     void observe(Bench bench, Runnable solved) {
         Bench atEnergies = bench.asking(needs(true));
         Bench overEnergies = bench.asking(needs(false));
-        axis = energies(atEnergies, solved);
+        axis = energies(atEnergies);
+        alongAxis(atEnergies, measurement.energy() instanceof EnergyPoints ? solved : () -> {});
         for (Request request : requests) {
-            Bench used = request.resolved(hasEnergyAxis()) ? atEnergies : overEnergies;
-            List<ObservableCall> columns = request.observable().columns(request.call(), bench.device());
-            double[] energies = energiesOf(request, axis);
-            double[][] values = new double[energies.length][];
-            for (int e = 0; e < energies.length; e++) {
-                values[e] = at(used, request, columns, energies[e]);
+            if (!onAxis(request)) {
+                boolean resolved = request.resolved(hasEnergyAxis());
+                double energy = resolved ? request.energy() : Double.NaN;
+                Bench used = resolved ? atEnergies : overEnergies;
+                List<ObservableCall> columns = request.observable().columns(request.call(), bench.device());
+                double[][] values = {at(used, request, columns, energy)};
+                request.put(point, new Request.Sample(new double[] {energy}, values, columns.size()));
             }
-            request.put(point, new Request.Sample(energies, values, columns.size()));
         }
     }
 
-    private double[] energiesOf(Request request, double[] axis) {
-        if (!request.resolved(hasEnergyAxis())) {
-            return new double[] {Double.NaN};
-        }
-        if (!Double.isNaN(request.energy())) {
-            return new double[] {request.energy()};
+    /** Some energies at a time for all requests, so that solutions need not be kept. */
+    private void alongAxis(Bench bench, Runnable solved) {
+        List<Request> wanted = requests.stream().filter(this::onAxis).toList();
+        if (wanted.isEmpty()) {
+            return;
         }
         if (axis.length == 0) {
-            throw new SolveFailure("'" + request.call() + "' has a value per energy, but measurement '"
+            throw new SolveFailure("'" + wanted.get(0).call() + "' has a value per energy, but measurement '"
                     + measurement.name() + "' has no energy axis; add 'energy = …' or pick a point with 'at'.");
         }
-        return axis;
+        double[][][] values = new double[wanted.size()][axis.length][];
+        for (int from = 0; from < axis.length; from += TOGETHER) {
+            int to = Math.min(axis.length, from + TOGETHER);
+            double[] some = Arrays.copyOfRange(axis, from, to);
+            bench.announce(some, solved);
+            for (int r = 0; r < values.length; r++) {
+                Request request = wanted.get(r);
+                List<ObservableCall> columns = request.observable().columns(request.call(), bench.device());
+                for (int e = from; e < to; e++) {
+                    values[r][e] = at(bench, request, columns, axis[e]);
+                }
+            }
+            bench.forget(some);
+        }
+        for (int r = 0; r < values.length; r++) {
+            Request request = wanted.get(r);
+            int columns =
+                    request.observable().columns(request.call(), bench.device()).size();
+            request.put(point, new Request.Sample(axis, values[r], columns));
+        }
     }
 
     private boolean hasEnergyAxis() {
@@ -149,17 +171,12 @@ final class PointTask {
         fixed = true;
     }
 
-    private double[] energies(Bench bench, Runnable solved) {
+    private double[] energies(Bench bench) {
         if (fixed) {
-            bench.announce(axis);
             return axis;
         }
         if (measurement.energy() instanceof EnergyPoints points) {
-            double[] energies = points.values().stream().mapToDouble(e -> e).toArray();
-            if (wantsAxis()) {
-                bench.announce(energies, solved);
-            }
-            return energies;
+            return points.values().stream().mapToDouble(e -> e).toArray();
         }
         return measurement.energy() instanceof AdaptiveEnergies adaptive ? adaptive(bench, adaptive) : new double[0];
     }

@@ -25,6 +25,9 @@ import org.isthmus.runtime.solve.Solver;
 public final class Bench {
     private static final int FEWEST_PANELS = 6;
 
+    /** Solutions with values for more sites than this are not kept. */
+    private static final int MANY_SITES = 10_000;
+
     /** In kT: between two of them a Fermi function is as good as a polynomial for 15 points. */
     private static final double[] THERMAL_BREAKS = {-22, -12, -6, -2.5, 0, 2.5, 6, 12, 22};
 
@@ -121,6 +124,18 @@ public final class Bench {
             at(distinct[k]);
             solved.run();
         });
+    }
+
+    /**
+     * Lets go of what was solved at energies that are not needed again, where each solution holds values for very many sites:
+     * some hundred of them would fill the memory.
+     */
+    public void forget(double[] energies) {
+        if (needs.sites() && device().sites().count() > MANY_SITES) {
+            for (double energy : energies) {
+                store.solved.remove(energy);
+            }
+        }
     }
 
     /** Number of energies solved so far. */

@@ -29,6 +29,9 @@ final class EnergyIntegral {
         0, 0.381830050505118944950369775488975,
         0, 0.417959183673469387755102040816327
     };
+    /** Panels whose energies are solved before any of them is summed. */
+    private static final int TOGETHER = 8;
+
     private static final int DEEPEST = 26;
     private static final int MOST_PANELS = 4000;
 
@@ -102,10 +105,19 @@ final class EnergyIntegral {
         int first = open.size();
         List<Done> done = new ArrayList<>();
         while (!open.isEmpty()) {
-            announce(open);
-            done.addAll(open.parallelStream()
-                    .map(panel -> evaluate(panel, integrand))
-                    .toList());
+            for (int from = 0; from < open.size(); from += TOGETHER) {
+                List<Panel> some = open.subList(from, Math.min(open.size(), from + TOGETHER));
+                double[] energies = energies(some);
+                if (bench != null) {
+                    bench.announce(energies);
+                }
+                done.addAll(some.parallelStream()
+                        .map(panel -> evaluate(panel, integrand))
+                        .toList());
+                if (bench != null) {
+                    bench.forget(energies);
+                }
+            }
             open = new ArrayList<>();
             if (done.isEmpty() || done.get(0).value().length == 0 || done.size() > MOST_PANELS) {
                 break;
@@ -155,17 +167,14 @@ final class EnergyIntegral {
         return panel.to() - panel.from();
     }
 
-    private void announce(List<Panel> panels) {
-        if (bench == null) {
-            return;
-        }
+    private static double[] energies(List<Panel> panels) {
         double[] energies = new double[15 * panels.size()];
         for (int p = 0; p < panels.size(); p++) {
             for (int k = 0; k < 15; k++) {
                 energies[15 * p + k] = panels.get(p).energy(panels.get(p).node(k));
             }
         }
-        bench.announce(energies);
+        return energies;
     }
 
     private static Done evaluate(Panel panel, DoubleFunction<double[]> integrand) {
