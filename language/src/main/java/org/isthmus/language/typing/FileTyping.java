@@ -14,6 +14,7 @@ import org.isthmus.language.isthmus.IsthmusPackage;
 import org.isthmus.language.isthmus.LatticeDeclaration;
 import org.isthmus.language.isthmus.LatticeMember;
 import org.isthmus.language.isthmus.LatticeUse;
+import org.isthmus.language.isthmus.ListLiteral;
 import org.isthmus.language.isthmus.Material;
 import org.isthmus.language.isthmus.MeasurementDeclaration;
 import org.isthmus.language.isthmus.OverlapDeclaration;
@@ -105,12 +106,32 @@ public final class FileTyping {
             site.getSettings().forEach(setting -> setting(setting, SettingEntry.Block.SITE, Place.NOWHERE));
         } else if (member instanceof HoppingDeclaration hopping) {
             translation(hopping.getTranslation());
-            scalarOrMatrix(hopping.getValue(), Dimension.ENERGY, "A hopping", Place.NOWHERE, true);
+            bond(hopping.getValue(), Dimension.ENERGY, "A hopping");
         } else if (member instanceof OverlapDeclaration overlap) {
             translation(overlap.getTranslation());
-            scalarOrMatrix(overlap.getValue(), Dimension.NUMBER, "An overlap", Place.NOWHERE, true);
+            bond(overlap.getValue(), Dimension.NUMBER, "An overlap");
         } else if (member instanceof Setting setting) {
             setting(setting, SettingEntry.Block.LATTICE, Place.NOWHERE);
+        }
+    }
+
+    /** A bond between sites of different numbers of orbitals is a matrix that is not square, written out by its rows. */
+    private void bond(Expression value, Dimension wanted, String what) {
+        boolean rows = value instanceof ListLiteral list
+                && !list.getElements().isEmpty()
+                && list.getElements().stream()
+                        .allMatch(row -> row instanceof ListLiteral one
+                                && one.getElements().size()
+                                        != list.getElements().size());
+        if (!rows) {
+            scalarOrMatrix(value, wanted, what, Place.NOWHERE, true);
+            return;
+        }
+        place(value, Place.NOWHERE);
+        for (Expression row : ((ListLiteral) value).getElements()) {
+            if (inference.typeOf(row) instanceof Type.ListOf list && list.element() instanceof Scalar element) {
+                dimension(row, element.dimension(), wanted, what);
+            }
         }
     }
 

@@ -8,6 +8,7 @@ import java.nio.file.Path;
 import java.util.List;
 import java.util.Map;
 import org.eclipse.emf.common.util.URI;
+import org.isthmus.runtime.device.HoppingTable;
 import org.isthmus.runtime.device.TabulatedLead;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.api.Timeout;
@@ -122,6 +123,16 @@ class ElaborationFindingsTest {
                 List.of(
                         "6 matrix-size: Hopping A -> B joins 2 and 1 orbitals: it needs a matrix of 2 rows and 1 column, not a number."),
                 Texts.findings(text));
+        String fits = text.replace("A -> B = -t;", "A -> B = [[-t], [0.5i*t]];");
+        silent(fits);
+        HoppingTable bonds = Texts.device(fits).hoppings();
+        assertEquals(-1, bonds.real(0, 0, 0));
+        assertEquals(0.5, bonds.imaginary(0, 1, 0));
+        fires(
+                fits,
+                "[[-t], [0.5i*t]]",
+                "[[-t, t, t], [t, t, t]]",
+                "6 matrix-size: Hopping A -> B needs a matrix of 2 rows and 1 column.");
     }
 
     @Test
