@@ -1,75 +1,53 @@
 package org.isthmus.examples;
 
 import static org.junit.jupiter.api.Assertions.assertEquals;
+import static org.junit.jupiter.api.Assertions.assertFalse;
 import static org.junit.jupiter.api.Assertions.assertTrue;
 
-import com.google.gson.JsonObject;
-import com.google.gson.JsonParser;
-import java.io.PrintWriter;
-import java.io.StringWriter;
-import java.nio.file.Files;
 import java.nio.file.Path;
 import java.util.List;
-import org.isthmus.language.ide.cli.ErrorLog;
-import org.isthmus.language.ide.cli.Main;
+import java.util.Optional;
+import java.util.stream.Stream;
+import org.isthmus.language.ide.pipeline.Pipeline;
+import org.isthmus.language.ide.pipeline.Project;
+import org.isthmus.language.ide.pipeline.SourceFile;
+import org.isthmus.runtime.result.MeasurementResult;
 import org.junit.jupiter.api.Test;
-import org.junit.jupiter.api.io.TempDir;
 import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.MethodSource;
 
 /** Every shipped file checks without errors or warnings and runs, and everything that it expects holds. */
 class ExamplesRunTest {
-    @TempDir
-    private Path out;
-
-    private record Outcome(int status, String text) {}
-
-    private static Outcome isthmus(Object... arguments) {
-        StringWriter text = new StringWriter();
-        PrintWriter writer = new PrintWriter(text);
-        String[] words = java.util.Arrays.stream(arguments).map(Object::toString).toArray(String[]::new);
-        return new Outcome(Main.execute(writer, writer, new ErrorLog(), words), text.toString());
-    }
-
     @Test
-    void theWholeProjectChecksStrictly() {
-        Outcome check = isthmus("check", "--strict", ExampleFiles.FOLDER);
-        assertEquals(0, check.status(), check.text());
+    void theWholeProjectChecksWithoutComplaint() throws Exception {
+        assertEquals(List.of(), ExampleRuns.complaints(ExampleFiles.FOLDER));
     }
 
-    static java.util.stream.Stream<Path> measuring() {
+    static Stream<Path> measuring() {
         return ExampleFiles.measuring();
     }
 
     @ParameterizedTest
     @MethodSource("measuring")
     void expectationsHold(Path file) throws Exception {
-        Outcome run = isthmus("run", file, "--out", out);
-        assertEquals(0, run.status(), run.text());
-        List<Path> folders;
-        try (var found = Files.list(out)) {
-            folders = found.toList();
-        }
-        assertTrue(!folders.isEmpty(), "no result for " + file);
-        for (Path folder : folders) {
-            JsonObject result = JsonParser.parseString(Files.readString(folder.resolve("result.json"))).getAsJsonObject();
-            assertTrue(result.get("residual").getAsDouble() < 1e-10, folder + ": " + result.get("residual"));
-            assertTrue(result.getAsJsonArray("expectations").size() > 0, folder + " expects nothing");
-            result.getAsJsonArray("expectations")
-                    .forEach(e -> assertEquals("held", e.getAsJsonObject().get("verdict").getAsString()));
+        List<MeasurementResult> results = ExampleRuns.run(file);
+        assertFalse(results.isEmpty(), "no result for " + file);
+        for (MeasurementResult result : results) {
+            // six decades above rounding, below anything that a user would notice
+            assertTrue(result.residual() < 1e-7, result.folder() + ": " + result.residual());
+            assertFalse(result.verdicts().isEmpty(), result.folder() + " expects nothing");
+            result.verdicts().forEach(v -> assertTrue(v.held(), v.sentence()));
         }
     }
 
     /** Canonical layout: what a user reads first should look as the formatter leaves it. */
     @Test
-    void theFilesAreLaidOutCanonically() {
-        Object[] arguments = new Object[ExampleFiles.all().size() + 2];
-        arguments[0] = "format";
-        arguments[1] = "--check";
-        for (int k = 0; k + 2 < arguments.length; k++) {
-            arguments[k + 2] = ExampleFiles.all().get(k);
+    void theFilesAreLaidOutCanonically() throws Exception {
+        Pipeline pipeline = new Pipeline("tests");
+        Project project = pipeline.load(List.of(ExampleFiles.FOLDER));
+        assertEquals(ExampleFiles.all().size(), project.parsed().size());
+        for (SourceFile file : project.parsed()) {
+            assertEquals(Optional.empty(), pipeline.relaidOut(project, file), file.shown());
         }
-        Outcome check = isthmus(arguments);
-        assertEquals(0, check.status(), check.text());
     }
 }
