@@ -28,7 +28,9 @@ public final class BlochModes implements SurfaceMethod {
     private static final double[][] SHIFTS = {{0.83, 1.31}, {-1.17, 0.71}, {0.57, -1.61}, {-0.77, -1.93}};
 
     /** Where the end of a lead is looked for, as part of the hopping. */
-    private static final double[] BESIDE = {0, 1e-9, -1e-9, 1e-8, -1e-8, 1e-7, -1e-7, 1e-6, -1e-6};
+    private static final double[] BESIDE = {
+        0, 1e-9, -1e-9, 1e-8, -1e-8, 1e-7, -1e-7, 1e-6, -1e-6, 1e-5, -1e-5, 1e-4, -1e-4
+    };
 
     /** A wave slower than this part of the hopping stands still; 10⁻⁹ off a band edge, v = 6·10⁻⁵. */
     private static final double STANDING = 2e-5;
@@ -80,7 +82,7 @@ public final class BlochModes implements SurfaceMethod {
      * {@inheritDoc}
      *
      * <p>Where a wave stands still, as at the edge of a band, nothing tells incoming from outgoing, and on a flat band every
-     * λ solves the equation: the end of the lead is then taken a little beside, by 10⁻⁹ to 10⁻⁶ of the hopping. That is
+     * λ solves the equation: the end of the lead is then taken a little beside, by 10⁻⁹ to 10⁻⁴ of the hopping. That is
      * the end of a lead whose bands are moved by as much, so that every sum rule stays exact.
      */
     @Override
