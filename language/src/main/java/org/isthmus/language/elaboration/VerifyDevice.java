@@ -43,8 +43,8 @@ final class VerifyDevice implements Pass {
         int count = body.count();
         boolean[] bonded = new boolean[count];
         Parts parts = new Parts(count);
-        join(draft.hoppings, parts, bonded);
-        join(draft.overlaps, parts, bonded);
+        join(draft.hoppings, draft.sites, parts, bonded);
+        join(draft.overlaps, draft.sites, parts, bonded);
         for (Lead lead : draft.leads) {
             if (lead instanceof LatticeLead) {
                 lead.contactSites().forEach(site -> bonded[site] = true);
@@ -92,12 +92,27 @@ final class VerifyDevice implements Pass {
     }
 
     /** A hopping that a scale has made zero joins nothing. */
-    private static void join(HoppingTable bonds, Parts parts, boolean[] bonded) {
+    private static void join(HoppingTable bonds, SiteTable sites, Parts parts, boolean[] bonded) {
         for (int bond = 0; bond < bonds.count(); bond++) {
-            parts.join(bonds.from(bond), bonds.to(bond));
-            bonded[bonds.from(bond)] = true;
-            bonded[bonds.to(bond)] = true;
+            int from = bonds.from(bond);
+            int to = bonds.to(bond);
+            if (!zero(bonds, bond, sites.orbitals(from), sites.orbitals(to))) {
+                parts.join(from, to);
+                bonded[from] = true;
+                bonded[to] = true;
+            }
         }
+    }
+
+    private static boolean zero(HoppingTable bonds, int bond, int rows, int columns) {
+        for (int r = 0; r < rows; r++) {
+            for (int c = 0; c < columns; c++) {
+                if (bonds.real(bond, r, c) != 0 || bonds.imaginary(bond, r, c) != 0) {
+                    return false;
+                }
+            }
+        }
+        return true;
     }
 
     // ---- field

@@ -156,6 +156,15 @@ class ElaborationFindingsTest {
     }
 
     @Test
+    void aScaleOfZeroCutsTheBody() {
+        fires(
+                SHEET,
+                "lead source",
+                "hopping cut scaled 0 where x == 4.5 nm; lead source",
+                "3 unconnected-parts: The body has 2 parts without a bond between them: the largest has 25 sites, the smallest 25 sites and begins at x = 0 nm, y = 0 nm; close the gap if they belong together.");
+    }
+
+    @Test
     @Timeout(10)
     void hugeBodiesEndSoon() {
         fires(
