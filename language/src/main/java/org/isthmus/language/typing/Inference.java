@@ -272,8 +272,10 @@ public final class Inference {
         if (wanted.isNumber()) {
             return "divide it by a unit, such as " + Units.fitting(found).symbol() + ", to get a plain number.";
         }
-        return "write it in a unit of " + wanted.describe() + ", such as "
-                + Units.fitting(wanted).symbol() + ".";
+        String unit = Units.fitting(wanted).symbol();
+        return wanted.describe().contains(unit)
+                ? "write it in " + unit + "."
+                : "write it in a unit of " + wanted.describe() + ", such as " + unit + ".";
     }
 
     static String capital(String text) {
