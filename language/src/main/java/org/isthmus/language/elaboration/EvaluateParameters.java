@@ -80,6 +80,15 @@ final class EvaluateParameters implements Pass {
                     "Parameter '" + parameter.getName() + "' is " + value + ", not a finite number.");
         } else if (parameter.getRange() != null
                 && evaluator.evaluate(parameter.getRange()) instanceof Value.RangeValue range) {
+            if (range.upper() < range.lower()) {
+                draft.findings.add(
+                        IssueCode.EMPTY_RANGE,
+                        parameter.getRange(),
+                        "The range of parameter '" + parameter.getName() + "' runs backwards, from "
+                                + told(range.lower(), unit) + " to " + told(range.upper(), unit)
+                                + "; exchange its ends.");
+                return new ParameterValue(parameter.getName(), value, unit.symbol(), unit.factor());
+            }
             double slack = ROUNDING * Math.max(Math.abs(range.lower()), Math.abs(range.upper()));
             if (value < range.lower() - slack || value > range.upper() + slack) {
                 draft.findings.add(

@@ -7,6 +7,11 @@ import org.isthmus.language.evaluation.Evaluator;
 import org.isthmus.language.evaluation.Value;
 import org.isthmus.language.findings.IssueCode;
 import org.isthmus.language.isthmus.Points;
+import org.isthmus.language.typing.Inference;
+import org.isthmus.language.typing.Type;
+import org.isthmus.runtime.units.Dimension;
+import org.isthmus.runtime.units.Unit;
+import org.isthmus.runtime.units.Units;
 
 /** The values of an axis from its range or list. */
 final class AxisValues {
@@ -73,7 +78,8 @@ final class AxisValues {
         return new EvaluationFailure(
                 points.getValues(),
                 IssueCode.EMPTY_RANGE,
-                "This range runs backwards, from " + lower + " to " + upper + " (eV, nm, V, K); exchange its ends.");
+                "This range runs backwards, from " + told(lower, points) + " to " + told(upper, points)
+                        + "; exchange its ends.");
     }
 
     private static List<Double> counted(double lower, double upper, double count, Points points) {
@@ -95,7 +101,9 @@ final class AxisValues {
         }
         if (n > 1 && upper == lower) {
             throw new EvaluationFailure(
-                    points.getValues(), IssueCode.EMPTY_RANGE, "This range is empty: both ends are " + lower + ".");
+                    points.getValues(),
+                    IssueCode.EMPTY_RANGE,
+                    "This range is empty: both ends are " + told(lower, points) + ".");
         }
         List<Double> values = new ArrayList<>(n);
         for (int k = 0; k < n; k++) {
@@ -121,6 +129,20 @@ final class AxisValues {
             values.add(Math.min(Math.abs(round - value) <= 4 * Math.ulp(value) ? round : value, upper));
         }
         return values;
+    }
+
+    private static String told(double value, Points points) {
+        Dimension dimension =
+                new Inference().typeOf(points.getValues()) instanceof Type.Range range ? range.dimension() : null;
+        Unit unit = Units.fitting(dimension == null ? Dimension.NUMBER : dimension);
+        String number = text((float) unit.fromInternal(value));
+        return unit.symbol().isEmpty() ? number : number + " " + unit.symbol();
+    }
+
+    private static String text(float number) {
+        return number == Math.rint(number) && Math.abs(number) < 1e9
+                ? Long.toString((long) number)
+                : Float.toString(number);
     }
 
     private static String text(double number) {

@@ -13,6 +13,8 @@ public class SyntaxMessages extends SyntaxErrorMessageProvider {
             Pattern.compile("(?:mismatched|extraneous) input '(.*)' expecting (.+)", Pattern.DOTALL);
     private static final Pattern NOT_VIABLE =
             Pattern.compile("(?:no viable alternative at|required .* at) input '(.*)'", Pattern.DOTALL);
+    private static final Pattern NOT_CLOSED =
+            Pattern.compile("mismatched character '.*' expecting (.+)", Pattern.DOTALL);
     private static final int LONGEST = 40;
 
     @Override
@@ -41,6 +43,12 @@ public class SyntaxMessages extends SyntaxErrorMessageProvider {
             return Character.toUpperCase(found(notViable.group(1)).charAt(0))
                     + found(notViable.group(1)).substring(1) + " does not fit here.";
         }
+        Matcher notClosed = NOT_CLOSED.matcher(raw);
+        if (notClosed.matches()) {
+            return notClosed.group(1).contains("\"")
+                    ? "This text has no closing quote on its line."
+                    : "This comment is not closed; end it with '*/'.";
+        }
         return "This cannot be read: " + raw + ".";
     }
 
@@ -57,6 +65,9 @@ public class SyntaxMessages extends SyntaxErrorMessageProvider {
     private static String found(String text) {
         if (text.equals("<EOF>")) {
             return "the end of the file";
+        }
+        if (text.codePointCount(0, text.length()) == 1 && text.codePointAt(0) > 0x7E) {
+            return String.format("the character '%s' (U+%04X)", text, text.codePointAt(0));
         }
         String printable = text.codePoints()
                 .map(c -> Character.isISOControl(c) ? '\uFFFD' : c)

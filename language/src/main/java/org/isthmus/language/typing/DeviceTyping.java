@@ -85,6 +85,7 @@ final class DeviceTyping {
                     "Parameter '" + parameter.getName() + "' is declared as " + kind.withArticle()
                             + ", but its value is " + scalar.dimension().withArticle() + "; "
                             + Inference.fittingUnit(scalar.dimension(), kind));
+            inference.forget(parameter);
             return;
         }
         if (parameter.getRange() == null) {

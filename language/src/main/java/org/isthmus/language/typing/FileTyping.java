@@ -90,6 +90,9 @@ public final class FileTyping {
                 .orElse(null);
         if (known != null) {
             real(quantity.getValue(), type, known.dimension(), "'" + quantity.getName() + "' of a material");
+            if (type instanceof Scalar scalar && !scalar.dimension().equals(known.dimension())) {
+                inference.forget(quantity);
+            }
         }
     }
 

@@ -87,6 +87,11 @@ public final class Inference {
         return declarations.get(declaration);
     }
 
+    /** A declaration about which something was told already: what uses it is not told again. */
+    void forget(Declaration declaration) {
+        declarations.put(declaration, Type.UNKNOWN);
+    }
+
     private void reportCycle(Declaration declaration) {
         List<Declaration> ring = new ArrayList<>(open);
         ring = ring.subList(ring.indexOf(declaration), ring.size());
@@ -145,6 +150,14 @@ public final class Inference {
     }
 
     private Type literal(QuantityLiteral literal) {
+        if (literal.getValue() != null && Double.isInfinite(Double.parseDouble(literal.getValue()))) {
+            report(
+                    literal,
+                    IsthmusPackage.Literals.QUANTITY_LITERAL__VALUE,
+                    IssueCode.NOT_FINITE,
+                    literal.getValue() + " is greater than any number that is calculated with (1.8e308).");
+            return Type.UNKNOWN;
+        }
         if (literal.getUnit() == null) {
             return Type.real(Dimension.NUMBER);
         }

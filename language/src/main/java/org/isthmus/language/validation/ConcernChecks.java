@@ -3,13 +3,9 @@ package org.isthmus.language.validation;
 import java.util.Map;
 import org.eclipse.emf.ecore.EObject;
 import org.eclipse.emf.ecore.EStructuralFeature;
-import org.eclipse.xtext.EcoreUtil2;
 import org.eclipse.xtext.validation.AbstractDeclarativeValidator;
 import org.eclipse.xtext.validation.EValidatorRegistrar;
 import org.isthmus.language.findings.IssueCode;
-import org.isthmus.language.isthmus.SourceFile;
-import org.isthmus.language.typing.FileTyping;
-import org.isthmus.language.typing.TypeProblem;
 
 /** What the validators of one concern share. */
 abstract class ConcernChecks extends AbstractDeclarativeValidator {
@@ -34,28 +30,12 @@ abstract class ConcernChecks extends AbstractDeclarativeValidator {
         }
     }
 
-    /** True where nothing is wrong with the file that would make later findings follow from it. */
+    /** True where nothing is wrong with a declaration, or with those it stands on, that would make later findings follow. */
     protected boolean sound(EObject object) {
-        return sound(object, getContext());
-    }
-
-    private static boolean sound(EObject object, Map<Object, Object> context) {
-        Object known = context == null ? null : context.get(Soundness.class);
-        if (known instanceof Soundness soundness && soundness.file == EcoreUtil2.getRootContainer(object)) {
-            return soundness.sound;
+        Map<Object, Object> context = getContext();
+        if (context == null) {
+            return new Soundness().of(object);
         }
-        SourceFile file = (SourceFile) EcoreUtil2.getRootContainer(object);
-        boolean sound = file.eResource().getErrors().isEmpty()
-                && !EcoreUtil2.getAllContentsOfType(file, EObject.class).stream()
-                        .anyMatch(o -> o.eCrossReferences().stream().anyMatch(EObject::eIsProxy))
-                && FileTyping.problems(file).stream()
-                        .map(TypeProblem::code)
-                        .allMatch(code -> code.severity() != org.isthmus.runtime.device.Severity.ERROR);
-        if (context != null) {
-            context.put(Soundness.class, new Soundness(file, sound));
-        }
-        return sound;
+        return ((Soundness) context.computeIfAbsent(Soundness.class, key -> new Soundness())).of(object);
     }
-
-    private record Soundness(SourceFile file, boolean sound) {}
 }

@@ -5,6 +5,7 @@ import java.util.LinkedHashSet;
 import java.util.List;
 import java.util.Map;
 import java.util.Set;
+import java.util.stream.Collectors;
 import org.eclipse.emf.ecore.EObject;
 import org.eclipse.emf.ecore.resource.Resource;
 import org.eclipse.xtext.validation.Check;
@@ -25,7 +26,6 @@ import org.isthmus.language.isthmus.MeasurementStatement;
 import org.isthmus.language.isthmus.Parameter;
 import org.isthmus.language.isthmus.SweepAxis;
 import org.isthmus.language.measurement.MeasurementLowering;
-import org.isthmus.language.scoping.BuiltIns;
 import org.isthmus.language.structure.DeviceStructure;
 import org.isthmus.runtime.device.Device;
 import org.isthmus.runtime.device.DeviceFamily.Elaborated;
@@ -67,13 +67,8 @@ public class DeviceChecks extends ConcernChecks {
                 || structure.lattice().get().getLattice().eIsProxy()) {
             return false;
         }
-        for (DeviceDeclaration link : structure.chain()) {
-            if (link.getBase() != null && (link.getBase().eIsProxy() || link.getBase() == device) || !sound(link)) {
-                return false;
-            }
-        }
-        EObject lattice = structure.lattice().get().getLattice();
-        return BuiltIns.contains(lattice.eResource().getURI()) || sound(lattice);
+        boolean complete = structure.chain().get(0).getBase() == null;
+        return complete && sound(device);
     }
 
     /** Elaborates once per check and set of values. */
@@ -158,8 +153,8 @@ public class DeviceChecks extends ConcernChecks {
                             new Finding(
                                     finding.code(),
                                     finding.severity(),
-                                    finding.text() + told(values),
-                                    Places.of(declaration, null)),
+                                    finding.text() + told(device, values),
+                                    Places.of(declaration, IsthmusPackage.Literals.DECLARATION__NAME)),
                             declaration,
                             IsthmusPackage.Literals.DECLARATION__NAME);
                 }
@@ -189,16 +184,18 @@ public class DeviceChecks extends ConcernChecks {
                 .orElse(declaration);
     }
 
-    private static String told(Map<String, Double> values) {
+    private static String told(DeviceDeclaration device, Map<String, Double> values) {
         if (values.isEmpty()) {
             return "";
         }
-        StringBuilder text = new StringBuilder(" (with ");
-        values.forEach((name, value) -> text.append(text.length() > 7 ? ", " : "")
-                .append(name)
-                .append(" = ")
-                .append(value));
-        return text.append(")").toString();
+        DeviceStructure structure = DeviceStructure.of(device);
+        return values.entrySet().stream()
+                .map(value -> value.getKey() + " = "
+                        + structure
+                                .parameter(value.getKey())
+                                .map(p -> ParameterRange.told(p, value.getValue()))
+                                .orElse(String.valueOf(value.getValue())))
+                .collect(Collectors.joining(", ", " (with ", ")"));
     }
 
     /** Both ends of every sweep, the others at their first value. */

@@ -5,6 +5,7 @@ import java.util.List;
 import java.util.Set;
 import org.eclipse.emf.ecore.EObject;
 import org.eclipse.xtext.EcoreUtil2;
+import org.eclipse.xtext.nodemodel.util.NodeModelUtils;
 import org.eclipse.xtext.validation.Check;
 import org.isthmus.language.evaluation.Environment;
 import org.isthmus.language.evaluation.EvaluationFailure;
@@ -12,6 +13,7 @@ import org.isthmus.language.evaluation.Evaluator;
 import org.isthmus.language.findings.IssueCode;
 import org.isthmus.language.isthmus.Average;
 import org.isthmus.language.isthmus.BiasAxis;
+import org.isthmus.language.isthmus.BinaryExpression;
 import org.isthmus.language.isthmus.CatalogueEntry;
 import org.isthmus.language.isthmus.DeviceDeclaration;
 import org.isthmus.language.isthmus.Expectation;
@@ -54,6 +56,9 @@ public class MeasurementChecks extends ConcernChecks {
                 key = (setting.getTarget() instanceof Parameter ? "value " : "setting ")
                         + setting.getTarget().getName();
                 word = "A value of '" + setting.getTarget().getName() + "'";
+            } else if (statement instanceof Average average && linked(average.getParameter())) {
+                key = "average " + average.getParameter().getName();
+                word = "An average over '" + average.getParameter().getName() + "'";
             }
             if (key != null && !seen.add(key)) {
                 report(
@@ -143,7 +148,8 @@ public class MeasurementChecks extends ConcernChecks {
         if (!linked(measurement.getDevice())) {
             return;
         }
-        boolean told = false;
+        // a family without a first device has whatever leads
+        boolean told = DeviceStructure.chain(measurement.getDevice()).get(0).getBase() != null;
         for (Reference reference : EcoreUtil2.getAllContentsOfType(measurement, Reference.class)) {
             if (!(reference.getTarget() instanceof CatalogueEntry entry) || !inside(reference)) {
                 continue;
@@ -152,8 +158,9 @@ public class MeasurementChecks extends ConcernChecks {
             if (observable == null) {
                 continue;
             }
-            if (!observable.available()
-                    || reference.getArguments().size() > observable.arguments().mostLeads()) {
+            boolean matrix = observable.arguments().matrix()
+                    && reference.getArguments().size() == observable.arguments().mostLeads() + 1;
+            if (!observable.available() || matrix) {
                 report(
                         IssueCode.NOT_SOLVED_YET,
                         reference,
@@ -202,16 +209,49 @@ public class MeasurementChecks extends ConcernChecks {
                     "Neither side of this expectation is measured, so it says nothing about the device; name an observable.");
             return;
         }
+        if (left && right) {
+            if (!expectation.getOperator().matches("[<>]|!=")
+                    && text(expectation.getLeft()).equals(text(expectation.getRight()))) {
+                report(
+                        IssueCode.IDLE_EXPECTATION,
+                        expectation,
+                        null,
+                        "This cannot fail: both sides are the same. Compare with a value, or with something else.");
+            }
+            return;
+        }
         Expression measured = left ? expectation.getLeft() : expectation.getRight();
-        Expression bound = left ? expectation.getRight() : expectation.getLeft();
-        boolean atLeast = expectation.getOperator().equals(left ? ">=" : "<=");
-        if (left != right && atLeast && neverNegative(measured) && constant(bound) <= 0) {
+        double bound = constant(left ? expectation.getRight() : expectation.getLeft());
+        double slack = expectation.getTolerance() == null ? 0 : constant(expectation.getTolerance());
+        if (!Double.isFinite(bound) || !Double.isFinite(slack)) {
+            return;
+        }
+        slack = expectation.isRelative() ? slack / 100 * Math.abs(bound) : slack;
+        String operator = left ? expectation.getOperator() : mirrored(expectation.getOperator());
+        if ((operator.equals(">=") && bound - slack <= 0 || operator.equals(">") && bound - slack < 0)
+                && neverNegative(measured)) {
             report(
                     IssueCode.IDLE_EXPECTATION,
                     expectation,
                     null,
                     "This cannot fail: the measured side is never below zero. Expect a value, or an upper bound.");
+        } else if ((operator.equals("<=") && bound + slack >= 1 || operator.equals("<") && bound + slack > 1)
+                && neverAboveOne(measured)) {
+            report(
+                    IssueCode.IDLE_EXPECTATION,
+                    expectation,
+                    null,
+                    "This cannot fail: an occupation is never above one. Expect a value, or a lower bound.");
         }
+    }
+
+    private static String mirrored(String operator) {
+        return operator.replace('<', '~').replace('>', '<').replace('~', '>');
+    }
+
+    private static String text(Expression expression) {
+        return NodeModelUtils.getTokenText(NodeModelUtils.findActualNodeFor(expression))
+                .replaceAll("\\s+", "");
     }
 
     private static boolean observes(Expression expression) {
@@ -226,15 +266,34 @@ public class MeasurementChecks extends ConcernChecks {
     }
 
     private static boolean neverNegative(Expression expression) {
+        if (expression instanceof BinaryExpression binary
+                && !binary.getOperator().equals("-")) {
+            return neverNegative(binary.getLeft())
+                    && (binary.getOperator().equals("^") || neverNegative(binary.getRight()));
+        }
+        if (!observes(expression)) {
+            double value = constant(expression);
+            return value >= 0 && Double.isFinite(value);
+        }
         if (!(expression instanceof Reference reference) || !(reference.getTarget() instanceof CatalogueEntry entry)) {
             return false;
         }
-        if (entry.getName().equals("abs")) {
-            return true;
-        }
-        boolean reduction = List.of("min", "max", "mean").contains(entry.getName())
+        return entry.getName().equals("abs")
+                || NEVER_NEGATIVE.contains(entry.getName())
+                || reduces(reference) && neverNegative(reference.getArguments().get(0));
+    }
+
+    private static boolean neverAboveOne(Expression expression) {
+        return expression instanceof Reference reference
+                && reference.getTarget() instanceof CatalogueEntry entry
+                && (entry.getName().equals("occupation")
+                        || reduces(reference)
+                                && neverAboveOne(reference.getArguments().get(0)));
+    }
+
+    private static boolean reduces(Reference reference) {
+        return List.of("min", "max", "mean").contains(reference.getTarget().getName())
                 && reference.getArguments().size() == 1;
-        return reduction ? neverNegative(reference.getArguments().get(0)) : NEVER_NEGATIVE.contains(entry.getName());
     }
 
     private static double constant(Expression expression) {

@@ -287,7 +287,7 @@ public class NameChecks extends ConcernChecks {
             }
             for (Reference reference :
                     EcoreUtil2.getAllContentsOfType(resource.getContents().get(0), Reference.class)) {
-                if (reference.getTarget() == parameter) {
+                if (reference.getTarget() == parameter || unknownInFamily(reference, device)) {
                     return;
                 }
             }
@@ -298,6 +298,15 @@ public class NameChecks extends ConcernChecks {
                 IsthmusPackage.Literals.DECLARATION__NAME,
                 "No expression uses parameter '" + parameter.getName() + "' of device '" + device.getName()
                         + "'; remove it, or use it where its value was meant to matter.");
+    }
+
+    /** A name that is not known may have been meant for any parameter of the device around it. */
+    private static boolean unknownInFamily(Reference reference, DeviceDeclaration device) {
+        if (reference.getTarget() != null && !reference.getTarget().eIsProxy()) {
+            return false;
+        }
+        DeviceDeclaration around = EcoreUtil2.getContainerOfType(reference, DeviceDeclaration.class);
+        return around != null && DeviceStructure.chain(around).contains(device);
     }
 
     // ---- cycles

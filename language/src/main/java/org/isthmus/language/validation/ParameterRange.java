@@ -15,9 +15,7 @@ record ParameterRange(String name, double lower, double upper, Unit unit) {
     private static final double ROUNDING = 1e-12;
 
     static ParameterRange of(Parameter parameter, Evaluator evaluator) {
-        Dimension dimension =
-                new Inference().typeOf(parameter) instanceof Type.Scalar scalar ? scalar.dimension() : Dimension.NUMBER;
-        Unit unit = Units.fitting(dimension);
+        Unit unit = unit(parameter);
         if (parameter.getRange() != null
                 && evaluator.evaluate(parameter.getRange()) instanceof Value.RangeValue range) {
             return new ParameterRange(parameter.getName(), range.lower(), range.upper(), unit);
@@ -36,7 +34,23 @@ record ParameterRange(String name, double lower, double upper, Unit unit) {
                 + told(value) + ".");
     }
 
+    private static Unit unit(Parameter parameter) {
+        return Units.fitting(
+                new Inference().typeOf(parameter) instanceof Type.Scalar scalar
+                        ? scalar.dimension()
+                        : Dimension.NUMBER);
+    }
+
+    /** A value of a parameter with its unit. */
+    static String told(Parameter parameter, double value) {
+        return told(value, unit(parameter));
+    }
+
     private String told(double value) {
+        return told(value, unit);
+    }
+
+    private static String told(double value, Unit unit) {
         double number = unit.fromInternal(value);
         String text = number == Math.rint(number) && Math.abs(number) < 1e15
                 ? Long.toString((long) number)

@@ -8,12 +8,16 @@ import org.eclipse.xtext.validation.Check;
 import org.isthmus.language.findings.IssueCode;
 import org.isthmus.language.isthmus.Across;
 import org.isthmus.language.isthmus.Argument;
+import org.isthmus.language.isthmus.Body;
 import org.isthmus.language.isthmus.DephasingDeclaration;
 import org.isthmus.language.isthmus.DeviceDeclaration;
+import org.isthmus.language.isthmus.DeviceMember;
 import org.isthmus.language.isthmus.IsthmusPackage;
 import org.isthmus.language.isthmus.LatticeUse;
 import org.isthmus.language.isthmus.LeadDeclaration;
 import org.isthmus.language.isthmus.LeadSetting;
+import org.isthmus.language.isthmus.MagneticField;
+import org.isthmus.language.isthmus.Origin;
 import org.isthmus.language.isthmus.Setting;
 import org.isthmus.language.structure.DeviceStructure;
 import org.isthmus.language.typing.Suggestion;
@@ -49,6 +53,29 @@ public class StructureChecks extends ConcernChecks {
             }
         }
         return false;
+    }
+
+    /** What has no name can be there once; a derived device may give its own. */
+    @Check
+    public void givenTwice(DeviceDeclaration device) {
+        Set<String> seen = new HashSet<>();
+        for (DeviceMember member : device.getMembers()) {
+            String what = member instanceof LatticeUse
+                    ? "lattice"
+                    : member instanceof Body
+                            ? "body"
+                            : member instanceof Origin
+                                    ? "origin"
+                                    : member instanceof MagneticField ? "magnetic field" : null;
+            if (what != null && !seen.add(what)) {
+                report(
+                        IssueCode.DUPLICATE_NAME,
+                        member,
+                        null,
+                        "The " + what + " of device '" + device.getName()
+                                + "' is given a second time; remove one of them.");
+            }
+        }
     }
 
     @Check
