@@ -138,7 +138,7 @@ class LauncherIT {
                 new ProcessBuilder("kill", "-INT", String.valueOf(process.pid()))
                         .start()
                         .waitFor());
-        assertTrue(process.waitFor(30, TimeUnit.SECONDS), "does not stop");
+        assertTrue(process.waitFor(90, TimeUnit.SECONDS), "does not stop");
         assertEquals(130, process.exitValue(), () -> read(folder.resolve("log")));
         try (Stream<Path> left = Files.walk(folder)) {
             List<String> names = left.filter(Files::isRegularFile)
@@ -193,7 +193,7 @@ class LauncherIT {
         builder.environment().putIfAbsent("JAVA_HOME", System.getProperty("java.home"));
         builder.environment().putAll(environment);
         Process process = builder.start();
-        assertTrue(process.waitFor(60, TimeUnit.SECONDS), "still running: " + String.join(" ", command));
+        assertTrue(process.waitFor(180, TimeUnit.SECONDS), "still running: " + String.join(" ", command));
         return new Outcome(
                 process.exitValue(),
                 Files.readString(out, StandardCharsets.UTF_8),
