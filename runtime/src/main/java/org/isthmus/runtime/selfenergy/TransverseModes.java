@@ -1,5 +1,6 @@
 package org.isthmus.runtime.selfenergy;
 
+import java.util.Arrays;
 import java.util.Optional;
 import org.apache.commons.math3.complex.Complex;
 import org.isthmus.runtime.kernel.ComplexBackend;
@@ -13,6 +14,11 @@ import org.isthmus.runtime.kernel.Op;
  * Exact; n³ once, then n²·(touched orbitals) per energy.
  */
 public final class TransverseModes implements SurfaceMethod {
+    private static final double[] BESIDE = {0, 1e-9, -1e-9, 3e-9, -3e-9};
+
+    /** Distance from a band edge, in half band widths, below which a wave stands still: v = 3·10⁻⁵ of the hopping. */
+    private static final double STANDING = 1e-10;
+
     private final ComplexBackend backend;
     private final HermitianEigen modes;
     private final double coupling;
@@ -53,8 +59,28 @@ public final class TransverseModes implements SurfaceMethod {
                 : Optional.of(new TransverseModes(backend, backend.hermitianEigen(blocks.h00()), coupling, orbitals));
     }
 
+    /** The step to an energy at which no mode is at the edge of its band; 0 where none is. */
+    private double beside(double energy) {
+        for (double step : BESIDE) {
+            double moved = energy + step * coupling;
+            if (Arrays.stream(modes.values())
+                    .noneMatch(mode -> Math.abs(Math.abs(moved - mode) / (2 * coupling) - 1) < STANDING)) {
+                return step * coupling;
+            }
+        }
+        return 0;
+    }
+
+    /**
+     * {@inheritDoc}
+     *
+     * <p>At the very edge of a mode's band, where its wave stands still and its density of states diverges, the end of the
+     * lead is taken beside, by about 10⁻⁹ of the hopping.
+     */
     @Override
-    public Surface solve(double real, double imaginary) {
+    public Surface solve(double asked, double imaginary) {
+        double beside = imaginary == 0 ? beside(asked) : 0;
+        double real = asked + beside;
         int n = modes.values().length;
         ComplexMatrix scaled = touched.copy();
         int open = 0;
@@ -84,7 +110,7 @@ public final class TransverseModes implements SurfaceMethod {
                         (re * w.getImaginary() + im * w.getReal()) / coupling);
             }
         }
-        return new Surface(backend.multiply(Op.NONE, scaled, Op.ADJOINT, touched), open, 0);
+        return new Surface(backend.multiply(Op.NONE, scaled, Op.ADJOINT, touched), open, 0, beside);
     }
 
     @Override

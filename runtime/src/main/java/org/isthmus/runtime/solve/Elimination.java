@@ -24,11 +24,16 @@ import org.isthmus.runtime.plan.SolveStep.Eliminate;
  * imaginary part is needed to get past it.
  */
 final class Elimination {
-    /** Largest element of F_ee⁻¹F_eb that is let pass: its square multiplies rounding errors. */
-    private static final double TOLERATED = 100;
+    /** Largest element of F_ee⁻¹F_eb that is let pass: its square multiplies rounding errors on the way up. */
+    private static final double TOLERATED = 30;
 
     /** A level whose coupling to the border exceeds its distance from the energy by this factor is handed on. */
-    private static final double NEAR_LEVEL = 30;
+    private static final double NEAR_LEVEL = 10;
+
+    /** The same where the way down follows, on which the factors of all levels of the tree multiply. */
+    private static final double TOLERATED_DOWN = 4;
+
+    private static final double NEAR_LEVEL_DOWN = 2;
 
     /** A level nearer to the energy than this part of the block's largest level sits on it, to rounding. */
     private static final double ON_LEVEL = 1e-14;
@@ -166,7 +171,8 @@ final class Elimination {
         int[] eliminated = withDelayed(step.eliminated(), step);
         int[] border = step.border();
         Reduction reduction = reduced(assemble(k, eliminated, border), eliminated.length);
-        while (reduction == null || !(reduction.amplification() <= TOLERATED)) {
+        while (reduction == null
+                || !(reduction.amplification() <= (keep == Keep.NOTHING ? TOLERATED : TOLERATED_DOWN))) {
             boolean[] delayed = levels(assemble(k, eliminated, border), eliminated.length);
             int handed = 0;
             for (boolean flag : delayed) {
@@ -238,7 +244,7 @@ final class Elimination {
         }
         List<double[]> near = new ArrayList<>();
         for (int k = 0; k < count; k++) {
-            if (k == nearest || nearness[k] > NEAR_LEVEL) {
+            if (k == nearest || nearness[k] > (keep == Keep.NOTHING ? NEAR_LEVEL : NEAR_LEVEL_DOWN)) {
                 double[] vector = new double[2 * count];
                 System.arraycopy(eigen.vectors().data(), 2 * count * k, vector, 0, 2 * count);
                 near.add(vector);

@@ -9,6 +9,7 @@ import org.isthmus.runtime.device.HoppingTable;
 import org.isthmus.runtime.device.SiteTable;
 import org.isthmus.runtime.kernel.ComplexBackend;
 import org.isthmus.runtime.kernel.ComplexMatrix;
+import org.isthmus.runtime.kernel.Dense;
 import org.isthmus.runtime.kernel.Op;
 import org.isthmus.runtime.kernel.SingularMatrixException;
 import org.isthmus.runtime.plan.SolvePlan;
@@ -83,6 +84,7 @@ final class FrontalSolver implements Solver {
             double[][] shares = sweep().shares(coupled.remainder, values);
             byLead = Arrays.copyOf(shares, n);
             total = shares[n];
+            coupled = coupled.with(requireFed(coupled, byLead, total));
         }
         int[] modes = new int[n];
         for (int p = 0; p < n; p++) {
@@ -127,6 +129,30 @@ final class FrontalSolver implements Solver {
         }
     }
 
+    /**
+     * A = Σ G Γ_p G† at every site, relative to the largest of A and G: on a long way down the tree, with many delayed pivots, digits
+     * can be lost that the leads do not see.
+     */
+    private double requireFed(Coupled coupled, double[][] byLead, double[] total) {
+        double largest = Dense.of(coupled.green).largest();
+        double broken = 0;
+        for (int site = 0; site < total.length; site++) {
+            double fed = 0;
+            for (double[] lead : byLead) {
+                fed += lead[site];
+            }
+            largest = Math.max(largest, Math.abs(total[site]));
+            broken = Math.max(broken, Math.abs(total[site] - fed));
+        }
+        double relative = broken == 0 ? 0 : broken / largest;
+        if (!(relative < TRUSTWORTHY)) {
+            throw new SolveFailure("At " + coupled.energy + " eV the states at the sites of device '"
+                    + point.device().name() + "' are known to " + relative
+                    + " only; move the energy a little, away from a band edge or a bound state.");
+        }
+        return relative;
+    }
+
     /** G Γ G† for a Γ on some rows. */
     private ComplexMatrix fed(ComplexMatrix green, int[] places, ComplexMatrix broadening) {
         int[] all = IntStream.range(0, green.rows()).toArray();
@@ -139,7 +165,16 @@ final class FrontalSolver implements Solver {
     }
 
     private record Coupled(
-            Remainder remainder, ComplexMatrix green, Contact.SelfEnergy[] sigmas, int[][] places, double residual) {}
+            double energy,
+            Remainder remainder,
+            ComplexMatrix green,
+            Contact.SelfEnergy[] sigmas,
+            int[][] places,
+            double residual) {
+        Coupled with(double another) {
+            return new Coupled(energy, remainder, green, sigmas, places, Math.max(residual, another));
+        }
+    }
 
     private Coupled couple(double asked, double imaginary, Keep keep) {
         double real = asked;
@@ -183,7 +218,7 @@ final class FrontalSolver implements Solver {
                     + point.device().name() + "' are fulfilled to " + residual
                     + " only; move the energy a little, away from a band edge or a bound state.");
         }
-        return new Coupled(remainder, green, sigmas, places, residual);
+        return new Coupled(asked, remainder, green, sigmas, places, residual);
     }
 
     private Contact.SelfEnergy[] selfEnergies(double real, double imaginary) {

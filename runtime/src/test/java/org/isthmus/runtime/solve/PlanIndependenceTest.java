@@ -2,6 +2,7 @@ package org.isthmus.runtime.solve;
 
 import static org.junit.jupiter.api.Assertions.assertArrayEquals;
 import static org.junit.jupiter.api.Assertions.assertEquals;
+import static org.junit.jupiter.api.Assertions.assertThrows;
 import static org.junit.jupiter.api.Assertions.assertTrue;
 
 import java.util.ArrayList;
@@ -12,6 +13,7 @@ import org.isthmus.runtime.kernel.ComplexBackend;
 import org.isthmus.runtime.kernel.selection.Backends;
 import org.isthmus.runtime.plan.Planner;
 import org.isthmus.runtime.plan.SolvePlan;
+import org.junit.jupiter.api.Test;
 import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.CsvSource;
 import org.junit.jupiter.params.provider.ValueSource;
@@ -62,6 +64,19 @@ class PlanIndependenceTest {
                 assertTrue(solution.equationResidual() < 1e-10);
             }
         }
+    }
+
+    /**
+     * Slices of a clean strip with a third of a flux quantum per loop hand on level after level next to E = 0, and lose the
+     * states at the sites on the long way back: that must be told. A dissection's way is short.
+     */
+    @Test
+    void lostDigitsAreTold() {
+        Device device = TestDevices.strip(60, 17, s -> 0, 1.0 / 3);
+        assertThrows(SolveFailure.class, () -> solve(device, Planner.slices(device), "native", 1e-5));
+        EnergySolution solution = solve(device, Planner.plan(device), "native", 1e-5);
+        assertEquals(solution.openModes(0), solution.transmission(0, 1), 1e-9);
+        assertTrue(solution.equationResidual() < 1e-8);
     }
 
     /** Unitarity of a disordered strip: T + R = open modes, from both ends (conservation of current). */
