@@ -251,40 +251,30 @@ final class SideLead {
 
     private HoppingTable within(LeadCells cells, BondList bonds, List<Lattice.Bond> source) {
         Collector collector = new Collector(source);
-        Gauge gauge = draft.gauge;
-        cells.eachWithin(
-                bonds,
-                (bond, from, to, reversed) -> collector.take(
-                        bond,
-                        from,
-                        to,
-                        reversed,
-                        gauge.phase(
-                                cells.side(),
-                                cells.coordinate(from, 1, 0),
-                                cells.coordinate(from, 1, 1),
-                                cells.coordinate(to, 1, 0),
-                                cells.coordinate(to, 1, 1))));
+        cells.eachWithin(bonds, fromFirstCell(cells, collector, 1));
         return collector.table();
     }
 
     private HoppingTable outward(LeadCells cells, BondList bonds, List<Lattice.Bond> source) {
         Collector collector = new Collector(source);
-        Gauge gauge = draft.gauge;
-        cells.eachOutward(
-                bonds,
-                (bond, from, to, reversed) -> collector.take(
-                        bond,
-                        from,
-                        to,
-                        reversed,
-                        gauge.phase(
-                                cells.side(),
-                                cells.coordinate(from, 1, 0),
-                                cells.coordinate(from, 1, 1),
-                                cells.coordinate(to, 2, 0),
-                                cells.coordinate(to, 2, 1))));
+        cells.eachOutward(bonds, fromFirstCell(cells, collector, 2));
         return collector.table();
+    }
+
+    /** Collects bonds from cell 1 to the given cell, each with the phase of the field. */
+    private LeadCells.BondTaker fromFirstCell(LeadCells cells, Collector collector, int toCell) {
+        Gauge gauge = draft.gauge;
+        return (bond, from, to, reversed) -> collector.take(
+                bond,
+                from,
+                to,
+                reversed,
+                gauge.phase(
+                        cells.side(),
+                        cells.coordinate(from, 1, 0),
+                        cells.coordinate(from, 1, 1),
+                        cells.coordinate(to, toCell, 0),
+                        cells.coordinate(to, toCell, 1)));
     }
 
     private HoppingTable contact(LeadCells cells, BondList bonds, List<Lattice.Bond> source) {

@@ -5,13 +5,9 @@ import java.util.LinkedHashSet;
 import java.util.Map;
 import java.util.Set;
 import org.isthmus.language.findings.IssueCode;
-import org.isthmus.language.isthmus.Constant;
 import org.isthmus.language.isthmus.Declaration;
 import org.isthmus.language.isthmus.Expression;
-import org.isthmus.language.isthmus.HeaderParameter;
-import org.isthmus.language.isthmus.Parameter;
-import org.isthmus.language.isthmus.Quantity;
-import org.isthmus.language.isthmus.VectorDeclaration;
+import org.isthmus.language.structure.WrittenValue;
 import org.isthmus.language.typing.Inference;
 
 /**
@@ -74,7 +70,7 @@ public final class Environment {
                     declaration, IssueCode.CYCLE, "'" + declaration.getName() + "' needs its own value.");
         }
         try {
-            Expression expression = replacements.getOrDefault(declaration, written(declaration));
+            Expression expression = replacements.getOrDefault(declaration, WrittenValue.of(declaration));
             if (expression == null) {
                 throw new EvaluationFailure(
                         declaration, IssueCode.KIND_MISMATCH, "'" + declaration.getName() + "' has no value.");
@@ -85,21 +81,5 @@ public final class Environment {
         } finally {
             open.remove(declaration);
         }
-    }
-
-    private static Expression written(Declaration declaration) {
-        if (declaration instanceof Constant constant) {
-            return constant.getValue();
-        }
-        if (declaration instanceof Parameter parameter) {
-            return parameter.getValue();
-        }
-        if (declaration instanceof HeaderParameter parameter) {
-            return parameter.getValue();
-        }
-        if (declaration instanceof Quantity quantity) {
-            return quantity.getValue();
-        }
-        return declaration instanceof VectorDeclaration vector ? vector.getValue() : null;
     }
 }

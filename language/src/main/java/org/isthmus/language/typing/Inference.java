@@ -13,27 +13,22 @@ import org.eclipse.emf.ecore.EStructuralFeature;
 import org.isthmus.language.findings.IssueCode;
 import org.isthmus.language.isthmus.BinaryExpression;
 import org.isthmus.language.isthmus.ComparisonExpression;
-import org.isthmus.language.isthmus.Constant;
 import org.isthmus.language.isthmus.Declaration;
 import org.isthmus.language.isthmus.Expression;
-import org.isthmus.language.isthmus.HeaderParameter;
 import org.isthmus.language.isthmus.IsthmusPackage;
 import org.isthmus.language.isthmus.ListLiteral;
-import org.isthmus.language.isthmus.Parameter;
 import org.isthmus.language.isthmus.PointLiteral;
-import org.isthmus.language.isthmus.Quantity;
 import org.isthmus.language.isthmus.QuantityLiteral;
 import org.isthmus.language.isthmus.RangeExpression;
 import org.isthmus.language.isthmus.Reference;
 import org.isthmus.language.isthmus.TextLiteral;
 import org.isthmus.language.isthmus.UnaryExpression;
-import org.isthmus.language.isthmus.VectorDeclaration;
+import org.isthmus.language.structure.WrittenValue;
 import org.isthmus.language.typing.Type.ListOf;
 import org.isthmus.language.typing.Type.Matrix;
 import org.isthmus.language.typing.Type.Point;
 import org.isthmus.language.typing.Type.Range;
 import org.isthmus.language.typing.Type.Scalar;
-import org.isthmus.language.typing.Type.Truth;
 import org.isthmus.runtime.units.Dimension;
 import org.isthmus.runtime.units.Unit;
 import org.isthmus.runtime.units.Units;
@@ -48,6 +43,7 @@ public final class Inference {
     private final Set<Declaration> open = new LinkedHashSet<>();
     private final List<TypeProblem> problems = new ArrayList<>();
     private final ReferenceTyping references = new ReferenceTyping(this);
+    private final OperatorTyping operators = new OperatorTyping(this);
 
     /** What was found wrong so far. */
     public List<TypeProblem> problems() {
@@ -81,7 +77,7 @@ public final class Inference {
             reportCycle(declaration);
             return Type.UNKNOWN;
         }
-        Type type = typeOf(valueOf(declaration));
+        Type type = typeOf(WrittenValue.of(declaration));
         open.remove(declaration);
         declarations.putIfAbsent(declaration, type);
         return declarations.get(declaration);
@@ -104,23 +100,6 @@ public final class Inference {
         ring.forEach(member -> declarations.put(member, Type.UNKNOWN));
     }
 
-    /** The expression that gives a declaration its value; null for what has none. */
-    static Expression valueOf(Declaration declaration) {
-        if (declaration instanceof Constant constant) {
-            return constant.getValue();
-        }
-        if (declaration instanceof Parameter parameter) {
-            return parameter.getValue();
-        }
-        if (declaration instanceof HeaderParameter parameter) {
-            return parameter.getValue();
-        }
-        if (declaration instanceof Quantity quantity) {
-            return quantity.getValue();
-        }
-        return declaration instanceof VectorDeclaration vector ? vector.getValue() : null;
-    }
-
     private Type infer(Expression expression) {
         if (expression instanceof QuantityLiteral literal) {
             return literal(literal);
@@ -129,13 +108,13 @@ public final class Inference {
             return references.typeOf(reference);
         }
         if (expression instanceof BinaryExpression binary) {
-            return binary(binary);
+            return operators.binary(binary);
         }
         if (expression instanceof UnaryExpression unary) {
-            return unary(unary);
+            return operators.unary(unary);
         }
         if (expression instanceof ComparisonExpression comparison) {
-            return comparison(comparison);
+            return operators.comparison(comparison);
         }
         if (expression instanceof PointLiteral point) {
             return point(point);
@@ -191,83 +170,9 @@ public final class Inference {
         return Type.real(unit.get().dimension().power(power));
     }
 
-    private Type unary(UnaryExpression unary) {
-        Type operand = typeOf(unary.getOperand());
-        if (operand == Type.UNKNOWN) {
-            return operand;
-        }
-        if (unary.getOperator().equals("not")) {
-            return operand instanceof Truth ? operand : unfit(unary.getOperand(), operand, "'not' needs a condition");
-        }
-        if (operand instanceof Scalar || operand instanceof Matrix || operand instanceof Point) {
-            return operand;
-        }
-        return unfit(unary.getOperand(), operand, "'" + unary.getOperator() + "' needs a quantity");
-    }
-
     Type unfit(Expression expression, Type found, String need) {
         report(expression, null, IssueCode.KIND_MISMATCH, need + ", but this is " + found.describe() + ".");
         return Type.UNKNOWN;
-    }
-
-    private Type binary(BinaryExpression binary) {
-        Type left = typeOf(binary.getLeft());
-        Type right = typeOf(binary.getRight());
-        if (left == Type.UNKNOWN || right == Type.UNKNOWN) {
-            return Type.UNKNOWN;
-        }
-        return switch (binary.getOperator()) {
-            case "and", "or" -> logical(binary, left, right);
-            case "+", "-" -> sum(binary, left, right);
-            case "*" -> product(binary, left, right);
-            case "/" -> quotient(binary, left, right);
-            case "^" -> power(binary, left, right);
-            default ->
-                left instanceof Type.Shape && right instanceof Type.Shape
-                        ? left
-                        : unfit(
-                                left instanceof Type.Shape ? binary.getRight() : binary.getLeft(),
-                                left instanceof Type.Shape ? right : left,
-                                "'&' needs two shapes");
-        };
-    }
-
-    private Type logical(BinaryExpression binary, Type left, Type right) {
-        String need = "'" + binary.getOperator() + "' needs a condition on both sides";
-        if (!(left instanceof Truth)) {
-            return unfit(binary.getLeft(), left, need);
-        }
-        return right instanceof Truth ? right : unfit(binary.getRight(), right, need);
-    }
-
-    private Type sum(BinaryExpression binary, Type left, Type right) {
-        if (left instanceof Type.Shape && right instanceof Type.Shape) {
-            return left;
-        }
-        Dimension leftDimension = dimension(left);
-        Dimension rightDimension = dimension(right);
-        if (leftDimension == null || rightDimension == null) {
-            boolean leftWrong = leftDimension == null;
-            return unfit(
-                    leftWrong ? binary.getLeft() : binary.getRight(),
-                    leftWrong ? left : right,
-                    "'" + binary.getOperator() + "' needs two quantities");
-        }
-        if (!leftDimension.equals(rightDimension)) {
-            return mismatch(
-                    binary, binary.getOperator().equals("+") ? "added" : "subtracted", leftDimension, rightDimension);
-        }
-        if (left instanceof Scalar a && right instanceof Scalar b) {
-            return new Scalar(leftDimension, a.complex() || b.complex());
-        }
-        if (left instanceof Matrix a && right instanceof Matrix b && a.size() == b.size()
-                || left instanceof Point p && right instanceof Point r && p.components() == r.components()) {
-            return left;
-        }
-        return unfit(
-                binary.getRight(),
-                right,
-                "'" + binary.getOperator() + "' after " + left.describe() + " needs the same");
     }
 
     Type mismatch(EObject where, String verb, Dimension left, Dimension right) {
@@ -303,118 +208,6 @@ public final class Inference {
             return matrix.dimension();
         }
         return type instanceof Point point ? point.dimension() : null;
-    }
-
-    private Type product(BinaryExpression binary, Type left, Type right) {
-        if (left instanceof Scalar a && right instanceof Scalar b) {
-            return new Scalar(a.dimension().times(b.dimension()), a.complex() || b.complex());
-        }
-        if (left instanceof Scalar a && right instanceof Matrix b) {
-            return new Matrix(b.size(), a.dimension().times(b.dimension()));
-        }
-        if (left instanceof Matrix a && right instanceof Scalar b) {
-            return new Matrix(a.size(), a.dimension().times(b.dimension()));
-        }
-        if (left instanceof Matrix a && right instanceof Matrix b && a.size() == b.size()) {
-            return new Matrix(a.size(), a.dimension().times(b.dimension()));
-        }
-        if (left instanceof Scalar a && !a.complex() && right instanceof Point b) {
-            return new Point(b.components(), a.dimension().times(b.dimension()));
-        }
-        if (left instanceof Point a && right instanceof Scalar b && !b.complex()) {
-            return new Point(a.components(), a.dimension().times(b.dimension()));
-        }
-        boolean leftWrong = dimension(left) == null;
-        return unfit(
-                leftWrong ? binary.getLeft() : binary.getRight(),
-                leftWrong ? left : right,
-                "'*' needs two quantities that can be multiplied");
-    }
-
-    private Type quotient(BinaryExpression binary, Type left, Type right) {
-        if (!(right instanceof Scalar below)) {
-            return unfit(binary.getRight(), right, "'/' needs a number or a quantity below");
-        }
-        if (left instanceof Scalar above) {
-            return new Scalar(above.dimension().over(below.dimension()), above.complex() || below.complex());
-        }
-        if (left instanceof Matrix above) {
-            return new Matrix(above.size(), above.dimension().over(below.dimension()));
-        }
-        if (left instanceof Point above && !below.complex()) {
-            return new Point(above.components(), above.dimension().over(below.dimension()));
-        }
-        return unfit(binary.getLeft(), left, "'/' needs a quantity above");
-    }
-
-    private Type power(BinaryExpression binary, Type left, Type right) {
-        if (!(left instanceof Scalar base)) {
-            return unfit(binary.getLeft(), left, "'^' needs a number or a quantity below");
-        }
-        if (!(right instanceof Scalar exponent) || exponent.complex()) {
-            return unfit(binary.getRight(), right, "The exponent must be a real number");
-        }
-        if (!exponent.dimension().isNumber()) {
-            report(
-                    binary.getRight(),
-                    null,
-                    IssueCode.DIMENSION_MISMATCH,
-                    "An exponent is a plain number, but this is "
-                            + exponent.dimension().withArticle() + "; "
-                            + fittingUnit(exponent.dimension(), Dimension.NUMBER));
-            return Type.UNKNOWN;
-        }
-        if (base.dimension().isNumber()) {
-            return base;
-        }
-        Optional<Double> value = StaticNumber.of(binary.getRight());
-        if (value.isEmpty()) {
-            report(
-                    binary.getRight(),
-                    null,
-                    IssueCode.DIMENSION_MISMATCH,
-                    "The exponent of " + base.dimension().withArticle()
-                            + " must be written as a number, so that the unit of the result is known.");
-            return Type.UNKNOWN;
-        }
-        try {
-            return new Scalar(base.dimension().power(value.get()), base.complex());
-        } catch (ArithmeticException e) {
-            report(
-                    binary.getRight(),
-                    null,
-                    IssueCode.DIMENSION_MISMATCH,
-                    capital(base.dimension().withArticle()) + " to the power " + value.get() + " has no unit.");
-            return Type.UNKNOWN;
-        }
-    }
-
-    private Type comparison(ComparisonExpression comparison) {
-        Type first = null;
-        for (Expression operand : comparison.getOperands()) {
-            Type type = typeOf(operand);
-            if (type == Type.UNKNOWN) {
-                continue;
-            }
-            if (!(type instanceof Scalar scalar)) {
-                return unfit(operand, type, "A comparison needs quantities");
-            }
-            if (scalar.complex()) {
-                report(
-                        operand,
-                        null,
-                        IssueCode.NOT_REAL,
-                        "Complex numbers have no order; compare abs(…), for example.");
-                return Type.TRUTH;
-            }
-            if (first == null) {
-                first = type;
-            } else if (!scalar.dimension().equals(dimension(first))) {
-                mismatch(comparison, "compared", dimension(first), scalar.dimension());
-                return Type.TRUTH;
-            }
-        }
-        return Type.TRUTH;
     }
 
     private Type point(PointLiteral point) {

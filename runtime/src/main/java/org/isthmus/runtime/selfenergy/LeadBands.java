@@ -1,7 +1,6 @@
 package org.isthmus.runtime.selfenergy;
 
 import java.util.ArrayList;
-import java.util.Arrays;
 import java.util.List;
 import org.apache.commons.math3.optim.MaxEval;
 import org.apache.commons.math3.optim.nonlinear.scalar.GoalType;
@@ -156,11 +155,5 @@ public final class LeadBands {
     public double[] range() {
         List<Double> extrema = extrema();
         return extrema.isEmpty() ? bounds() : new double[] {extrema.get(0), extrema.get(extrema.size() - 1)};
-    }
-
-    @Override
-    public String toString() {
-        return "bands of a lead with " + blocks.size() + " orbitals per cell, from " + Arrays.toString(bounds())
-                + " eV";
     }
 }

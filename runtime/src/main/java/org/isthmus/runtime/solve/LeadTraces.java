@@ -1,6 +1,5 @@
 package org.isthmus.runtime.solve;
 
-import java.util.Arrays;
 import java.util.stream.IntStream;
 import org.isthmus.runtime.kernel.ComplexBackend;
 import org.isthmus.runtime.kernel.ComplexBackend.HermitianEigen;
@@ -160,11 +159,5 @@ final class LeadTraces {
             }
         }
         return root;
-    }
-
-    @Override
-    public String toString() {
-        return "traces between " + leads() + " leads touching "
-                + Arrays.stream(broadening).mapToInt(ComplexMatrix::rows).sum() + " orbitals";
     }
 }

@@ -51,14 +51,9 @@ public final class NativeBackend implements ComplexBackend {
 
     @Override
     public void multiplyAdd(double factor, Op opA, ComplexMatrix a, Op opB, ComplexMatrix b, ComplexMatrix c) {
-        int rows = opA == Op.NONE ? a.rows() : a.columns();
-        int inner = opA == Op.NONE ? a.columns() : a.rows();
-        int innerOfB = opB == Op.NONE ? b.rows() : b.columns();
-        int columns = opB == Op.NONE ? b.columns() : b.rows();
-        if (inner != innerOfB || c.rows() != rows || c.columns() != columns) {
-            throw new IllegalArgumentException("cannot add " + opA + " " + a + " times " + opB + " " + b + " to " + c);
-        }
-        if (rows == 0 || columns == 0 || inner == 0) {
+        Product product = Product.of(opA, a.rows(), a.columns(), opB, b.rows(), b.columns());
+        product.mustFit(c.rows(), c.columns());
+        if (product.empty()) {
             return;
         }
         Buffers buffers = Buffers.ofThread();
@@ -69,9 +64,9 @@ public final class NativeBackend implements ComplexBackend {
                 openblas_full.CblasColMajor,
                 code(opA),
                 code(opB),
-                rows,
-                columns,
-                inner,
+                product.rows(),
+                product.columns(),
+                product.inner(),
                 buffers.scalar(factor),
                 pa,
                 a.rows(),
@@ -79,7 +74,7 @@ public final class NativeBackend implements ComplexBackend {
                 b.rows(),
                 buffers.one(),
                 pc,
-                rows);
+                product.rows());
         pc.position(0).get(c.data(), 0, c.data().length);
     }
 
@@ -99,14 +94,9 @@ public final class NativeBackend implements ComplexBackend {
             multiplyAdd(factor, opA, a.complex(), opB, b.complex(), c.complex());
             return;
         }
-        int rows = opA == Op.NONE ? a.rows() : a.columns();
-        int inner = opA == Op.NONE ? a.columns() : a.rows();
-        int innerOfB = opB == Op.NONE ? b.rows() : b.columns();
-        int columns = opB == Op.NONE ? b.columns() : b.rows();
-        if (inner != innerOfB || c.rows() != rows || c.columns() != columns) {
-            throw new IllegalArgumentException("cannot add " + opA + " " + a + " times " + opB + " " + b + " to " + c);
-        }
-        if (rows == 0 || columns == 0 || inner == 0) {
+        Product product = Product.of(opA, a.rows(), a.columns(), opB, b.rows(), b.columns());
+        product.mustFit(c.rows(), c.columns());
+        if (product.empty()) {
             return;
         }
         Buffers buffers = Buffers.ofThread();
@@ -117,9 +107,9 @@ public final class NativeBackend implements ComplexBackend {
                 openblas_full.CblasColMajor,
                 code(opA),
                 code(opB),
-                rows,
-                columns,
-                inner,
+                product.rows(),
+                product.columns(),
+                product.inner(),
                 factor,
                 pa,
                 a.rows(),
@@ -127,8 +117,32 @@ public final class NativeBackend implements ComplexBackend {
                 b.rows(),
                 1,
                 pc,
-                rows);
+                product.rows());
         pc.position(0).get(c.data(), 0, c.data().length);
+    }
+
+    /** The shape of op(A)·op(B). */
+    private record Product(int rows, int inner, int innerOfB, int columns) {
+        static Product of(Op opA, int rowsA, int columnsA, Op opB, int rowsB, int columnsB) {
+            boolean plainA = opA == Op.NONE;
+            boolean plainB = opB == Op.NONE;
+            return new Product(
+                    plainA ? rowsA : columnsA,
+                    plainA ? columnsA : rowsA,
+                    plainB ? rowsB : columnsB,
+                    plainB ? columnsB : rowsB);
+        }
+
+        void mustFit(int rowsC, int columnsC) {
+            if (inner != innerOfB || rowsC != rows || columnsC != columns) {
+                throw new IllegalArgumentException("cannot add a product of " + rows + " × " + inner + " and "
+                        + innerOfB + " × " + columns + " to a matrix of " + rowsC + " × " + columnsC);
+            }
+        }
+
+        boolean empty() {
+            return rows == 0 || columns == 0 || inner == 0;
+        }
     }
 
     private static int code(Op op) {
